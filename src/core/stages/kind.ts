@@ -1,4 +1,5 @@
 import type { Element } from "../elements/element.ts";
+import type { FormulaTree } from "../formula/tree.ts";
 import type { Problem } from "../result.ts";
 import type { UnitTag } from "../units/unit.ts";
 
@@ -44,7 +45,7 @@ export interface TabulatedResponse {
 export interface FormulaValue {
   readonly type: "formula";
   readonly text: string;
-  readonly tree: unknown;
+  readonly tree: FormulaTree;
 }
 
 export type PartSpec = NumberSpec | ChoiceSpec | FileSpec | FormulaSpec;
@@ -110,6 +111,8 @@ export const duration = number("second", "positive");
 export const metres = number("metre", "positive");
 export const gain = number("gain", "nonZero");
 export const lossDb = number("level", "positive");
+export const voltageNoise = number("voltPerRootHertz", "nonNegative");
+export const currentNoise = number("amperePerRootHertz", "nonNegative");
 export const sampleRate = number("samplesPerSecond", "positive");
 export const plain = number("number", "positive");
 
@@ -126,3 +129,13 @@ export const choice = (
   choices: readonly string[],
   initial: string,
 ): ChoiceSpec => ({ type: "choice", name, what, choices, initial, optional: false });
+
+type Defined<V, K extends StageKind> = Omit<K, "elements" | "check"> & {
+  readonly elements: (values: V) => readonly Element[];
+  readonly check?: (values: V) => (Problem & { readonly part: string }) | undefined;
+};
+
+/** Declares a kind with its own type of values `V`, whose names must be those of its parts. */
+export function defineKind<V extends object>(kind: Defined<V, StageKind>): StageKind {
+  return kind as unknown as StageKind;
+}
