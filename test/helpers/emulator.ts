@@ -154,9 +154,10 @@ export async function drawnCells(frame: string, size: Size): Promise<Cell[][]> {
   return cellsOf(terminal);
 }
 
-/** A terminal emulator with a keyboard, in memory. */
-export function createEmulator(size: Size): Emulator {
+/** A terminal emulator with a keyboard, in memory, with character widths of this version of Unicode. */
+export function createEmulator(size: Size, widths: "6" | "11" = "11"): Emulator {
   const terminal = createTerminal(size, false);
+  terminal.unicode.activeVersion = widths;
   const stdin = new FakeStdin();
   const stdout = new FakeStdout(size, terminal);
   const send = (text: string) => {
