@@ -119,7 +119,10 @@ interface Band {
 }
 
 function bandOf(lowHz: number, highHz: number): Band {
-  const centreHz = Math.sqrt(lowHz) * Math.sqrt(highHz);
+  const square = lowHz * highHz;
+  // One root of the product hits round centres exactly; at absurd frequencies the product leaves the range of doubles.
+  const inRange = square > Number.MIN_VALUE / Number.EPSILON && square < Number.POSITIVE_INFINITY;
+  const centreHz = inRange ? Math.sqrt(square) : Math.sqrt(lowHz) * Math.sqrt(highHz);
   return { centreHz, width: (highHz - lowHz) / centreHz };
 }
 
