@@ -83,9 +83,7 @@ export function openTerminal(options: TerminalOptions): Terminal {
   };
   const onResize = () => {
     const size = sizeNow();
-    if (size.columns === stdout.columns && size.rows === stdout.rows) return;
-    stdout.resize(size);
-    for (const listener of sizeListeners) listener(size);
+    if (size.columns !== stdout.columns || size.rows !== stdout.rows) stdout.resize(size);
   };
   const onStreamError = (error: unknown) => {
     if (session.isActive && isHangup(error)) endings.hangUp();
@@ -101,6 +99,9 @@ export function openTerminal(options: TerminalOptions): Terminal {
   keys.on("end", onKeysEnd);
   real.on("error", onStreamError);
   real.on("resize", onResize);
+  stdout.on("resize", () => {
+    for (const listener of sizeListeners) listener({ columns: stdout.columns, rows: stdout.rows });
+  });
   enter();
 
   let isOpen = true;
