@@ -1,4 +1,5 @@
 import type { Chain, ChainStage } from "../chain.ts";
+import type { Rational } from "../rational.ts";
 import {
   addInverse,
   addProduct,
@@ -12,11 +13,9 @@ import {
 import {
   type BranchCoefficients,
   type ComplexArray,
-  constant,
   type ElementSamples,
   empty,
   sampleElement,
-  sampleRational,
 } from "./samples.ts";
 
 /** The chain's response over a grid of frequencies. */
@@ -35,13 +34,16 @@ export interface SampledResponse {
 export class Sampler {
   readonly freqHz: Float64Array;
   readonly #omega: Float64Array;
-  readonly #inverseOmega: Float64Array;
+  readonly #carrier: Carrier;
   readonly #stages = new WeakMap<ChainStage, readonly ElementSamples[]>();
 
   constructor(freqHz: Float64Array) {
     this.freqHz = freqHz;
     this.#omega = freqHz.map((freq) => 2 * Math.PI * freq);
-    this.#inverseOmega = this.#omega.map((omega) => 1 / omega);
+    this.#carrier = new Carrier(
+      this.#omega,
+      this.#omega.map((omega) => 1 / omega),
+    );
   }
 
   response(chain: Chain): SampledResponse {
@@ -52,18 +54,35 @@ export class Sampler {
     return { freqHz: this.freqHz, gainDb, phaseDeg };
   }
 
-  /** H as `(re + j·im)·2^exponent`, counted as the chain says. */
+  /**
+   * H as `(re + j·im)·2^exponent`, counted as the chain says. The arrays are the sampler's own and hold until the
+   * next call.
+   */
   transfer(chain: Chain): Transfer {
-    const omega = this.#omega;
-    const carrier = new Carrier(omega, this.#inverseOmega, loadPair(chain, omega));
-    for (let k = chain.stages.length - 1; k >= 0; k--) carrier.carryStage(this.#samplesOf(chain.stages[k]));
+    const carrier = this.#carrier;
+    carrier.start();
+    if (chain.loadImpedance !== undefined) carrier.carry(this.#branch("shunt", chain.loadImpedance));
+    for (let k = chain.stages.length - 1; k >= 0; k--) {
+      const elements = this.#samplesOf(chain.stages[k]);
+      for (let e = elements.length - 1; e >= 0; e--) carrier.carry(elements[e]);
+    }
     if (chain.against === "input") return carrier.transfer();
-    carrier.carryStage([sampleElement({ form: "series", impedance: chain.sourceImpedance }, omega)]);
+    carrier.carry(this.#branch("series", chain.sourceImpedance));
     const overEmf = carrier.transfer();
-    if (chain.against === "emf") return overEmf;
-    const direct = new Carrier(omega, this.#inverseOmega, loadPair(chain, omega));
-    direct.carryStage([sampleElement({ form: "series", impedance: chain.sourceImpedance }, omega)]);
-    return quotient(overEmf, direct.transfer());
+    return chain.against === "emf" ? overEmf : this.#overDirect(overEmf, chain);
+  }
+
+  /** Over what the load would get with the chain taken out. */
+  #overDirect(overEmf: Transfer, chain: Chain): Transfer {
+    const kept = { re: overEmf.re.slice(), im: overEmf.im.slice(), exponent: overEmf.exponent.slice() };
+    const direct = this.transfer({ ...chain, stages: [], against: "emf" });
+    divideBy(kept, direct);
+    for (let k = 0; k < kept.exponent.length; k++) kept.exponent[k] -= direct.exponent[k];
+    return kept;
+  }
+
+  #branch(form: "series" | "shunt", impedance: Rational): ElementSamples {
+    return sampleElement({ form, impedance }, this.#omega);
   }
 
   #samplesOf(stage: ChainStage): readonly ElementSamples[] {
@@ -80,22 +99,6 @@ export interface Transfer extends ComplexArray {
   readonly exponent: Int32Array;
 }
 
-interface Start {
-  readonly v: ComplexArray;
-  readonly i: ComplexArray;
-}
-
-/** One volt at an open output, or the load's own pair. */
-function loadPair(chain: Chain, omega: Float64Array): Start {
-  const load = chain.loadImpedance;
-  if (load === undefined) return { v: constant(1, omega.length), i: empty(omega.length) };
-  const { num, den, omega0 } = load;
-  return {
-    v: sampleRational({ num, den: [1], omega0 }, omega),
-    i: sampleRational({ num: den, den: [1], omega0 }, omega),
-  };
-}
-
 /** So many elements may pass before the pair is looked at for leaving the range of double precision. */
 const ELEMENTS_BETWEEN_CHECKS = 8;
 const LARGE = 2 ** 200;
@@ -110,37 +113,49 @@ class Carrier {
   readonly #inverseOmega: Float64Array;
   readonly #v: ComplexArray;
   readonly #i: ComplexArray;
-  /** Product of n; starts as the voltage at the load. */
+  /** Product of n; one until `#hasProduct`. */
   readonly #n: ComplexArray;
-  /** The pair is to be multiplied by 2^−exponent relative to the product. */
+  readonly #out: ComplexArray;
+  /** H is to be multiplied by 2^exponent. */
   readonly #exponent: Int32Array;
+  #hasProduct = false;
   #sinceCheck = 0;
 
-  constructor(omega: Float64Array, inverseOmega: Float64Array, { v, i }: Start) {
+  constructor(omega: Float64Array, inverseOmega: Float64Array) {
     this.#omega = omega;
     this.#inverseOmega = inverseOmega;
-    this.#v = v;
-    this.#i = i;
-    this.#n = { re: v.re.slice(), im: v.im.slice() };
+    this.#v = empty(omega.length);
+    this.#i = empty(omega.length);
+    this.#n = empty(omega.length);
+    this.#out = empty(omega.length);
     this.#exponent = new Int32Array(omega.length);
   }
 
-  carryStage(elements: readonly ElementSamples[]): void {
-    for (let k = elements.length - 1; k >= 0; k--) {
-      this.#carry(elements[k]);
-      if (++this.#sinceCheck >= ELEMENTS_BETWEEN_CHECKS) this.#keepInRange();
-    }
+  /** One volt at an open output. */
+  start(): void {
+    fill(this.#v, 1);
+    fill(this.#i, 0);
+    fill(this.#n, 1);
+    this.#exponent.fill(0);
+    this.#hasProduct = false;
+    this.#sinceCheck = 0;
   }
 
   /** `n / v`: the voltage at the load over that where the pair now stands. */
   transfer(): Transfer {
     this.#keepInRange();
-    const out = { re: this.#n.re.slice(), im: this.#n.im.slice() };
-    divideBy(out, this.#v);
-    return { ...out, exponent: this.#exponent };
+    this.#out.re.set(this.#n.re);
+    this.#out.im.set(this.#n.im);
+    divideBy(this.#out, this.#v);
+    return { ...this.#out, exponent: this.#exponent };
   }
 
-  #carry(element: ElementSamples): void {
+  carry(element: ElementSamples): void {
+    this.#apply(element);
+    if (++this.#sinceCheck >= ELEMENTS_BETWEEN_CHECKS) this.#keepInRange();
+  }
+
+  #apply(element: ElementSamples): void {
     switch (element.form) {
       case "series":
         this.#addBranch(this.#v, this.#i, element.branch, "impedance");
@@ -175,28 +190,27 @@ class Carrier {
     multiplyBy(this.#i, d);
     addProduct(this.#i, c, v);
     multiplyBy(this.#n, n);
+    this.#hasProduct = true;
   }
 
   #isolate(stage: Extract<ElementSamples, { form: "isolating" }>): void {
     if (stage.outputImpedance) addProduct(this.#v, stage.outputImpedance, this.#i);
     multiplyBy(this.#n, stage.transfer);
     divideBy(this.#n, this.#v);
-    this.#v.re.fill(1);
-    this.#v.im.fill(0);
+    this.#hasProduct = true;
+    fill(this.#v, 1);
     if (stage.inputAdmittance) {
       this.#i.re.set(stage.inputAdmittance.re);
       this.#i.im.set(stage.inputAdmittance.im);
-    } else {
-      this.#i.re.fill(0);
-      this.#i.im.fill(0);
-    }
+    } else fill(this.#i, 0);
   }
 
   /** Chains of many stages reach far beyond 1e308: powers of two are taken out and kept apart. */
   #keepInRange(): void {
     this.#sinceCheck = 0;
     if (!inRange(this.#v, this.#i, SMALL * SMALL, LARGE * LARGE)) this.#rescale(this.#v, this.#i, -1);
-    if (!inRange(this.#n, this.#n, SMALL * SMALL, LARGE * LARGE)) this.#rescale(this.#n, NOTHING, 1);
+    if (this.#hasProduct && !inRange(this.#n, this.#n, SMALL * SMALL, LARGE * LARGE))
+      this.#rescale(this.#n, NOTHING, 1);
   }
 
   #rescale(p: ComplexArray, q: ComplexArray, direction: 1 | -1): void {
@@ -215,8 +229,7 @@ const NOTHING: ComplexArray = empty(0);
 const powerOfTwo = (size: number): number =>
   size > 0 && size < Infinity ? Math.max(-1000, Math.min(1000, Math.round(Math.log2(size)))) : 0;
 
-function quotient(p: Transfer, q: Transfer): Transfer {
-  const out = { re: p.re.slice(), im: p.im.slice() };
-  divideBy(out, q);
-  return { ...out, exponent: p.exponent.map((exponent, k) => exponent - q.exponent[k]) };
+function fill({ re, im }: ComplexArray, value: number): void {
+  re.fill(value);
+  im.fill(0);
 }
