@@ -41,7 +41,7 @@ export function syntaxProblem(
     return { ...problemAt(path, found, "no comma behind the last entry"), offset: comma };
   }
   const isAfter = root !== undefined && code === "InvalidSymbol" && offset >= root.offset + root.length;
-  const isName = next === "PropertyNameExpected";
+  const isName = code === "InvalidSymbol" && next === "PropertyNameExpected";
   const allowed = isAfter ? ALLOWED.EndOfFileExpected : isName ? NAME : ALLOWED[code];
   return { ...problemAt(path, foundText(text, offset, length), allowed ?? VALUE), offset };
 }

@@ -38,7 +38,6 @@ function checkSpecified(spec: PartSpec, raw: unknown, context: DocumentContext):
   if (spec.type === "number") return readValue(raw, spec);
   if (spec.type === "choice") return checkChoice(spec, raw);
   if (typeof raw !== "string") return refuse(`found ${described(raw)}`, `a text: ${spec.what}`);
-  if (raw.trim() === "") return refuse("it is empty", spec.what);
   return spec.type === "file" ? checkFile(raw, context) : checkFormula(raw, context);
 }
 
@@ -48,6 +47,7 @@ function checkChoice({ choices }: ChoiceSpec, raw: unknown): Result<PartValue> {
 }
 
 function checkFile(file: string, context: DocumentContext): Result<PartValue> {
+  if (file.trim() === "") return refuse("it is empty", "the name of a file");
   if (file.length <= MAX_FILE_NAME_LENGTH) return context.table(file);
   return refuse(
     `found a text of ${file.length} characters`,

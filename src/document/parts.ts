@@ -1,9 +1,9 @@
 import type { PartSpec, PartValue, PartValues, StageKind } from "../core/stages/kind.ts";
-import { UNITS } from "../core/units/unit.ts";
 import type { DocumentContext } from "./context.ts";
 import { missingConstant } from "./formula-names.ts";
 import { checkPart, partNameProblem } from "./part.ts";
 import { type DocumentProblem, problemAt } from "./problem.ts";
+import { wanted } from "./value.ts";
 import { orList } from "./words.ts";
 
 export interface Resolved<T> {
@@ -42,10 +42,10 @@ const missingParts = (
 ): readonly DocumentProblem[] =>
   kind.parts
     .filter(({ name, optional }) => !optional && !Object.hasOwn(parts, name))
-    .map((spec) => problemAt(["parts", spec.name], `it is missing (${spec.what})`, wanted(spec)));
+    .map((spec) => problemAt(["parts", spec.name], `it is missing (${spec.what})`, wantedFor(spec)));
 
-function wanted(spec: PartSpec): string {
-  if (spec.type === "number") return UNITS[spec.unit].wanted;
+function wantedFor(spec: PartSpec): string {
+  if (spec.type === "number") return wanted(spec);
   if (spec.type === "choice") return orList(spec.choices.map((choice) => `"${choice}"`));
   return "a text";
 }

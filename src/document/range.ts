@@ -1,22 +1,14 @@
+import { MOST_SWEEP_POINTS, type Sweep, sweepLength } from "../core/response/grid.ts";
 import { formatQuantity } from "../core/units/format.ts";
 import { type DocumentProblem, described, problemAt } from "./problem.ts";
 import type { SweepDocument } from "./types.ts";
 import { positive, type ValueReader, type ValueSpec } from "./value.ts";
 
-export interface ResolvedSweep {
-  readonly fromHz: number;
-  readonly toHz: number;
-  /** Points per decade. */
-  readonly perDecade: number;
-}
+/** As the engine takes it: `fromHz`, `toHz`, `perDecade`. */
+export type ResolvedSweep = Sweep;
 
 export const DEFAULT_SWEEP: ResolvedSweep = { fromHz: 1, toHz: 1e6, perDecade: 50 };
-export const MAX_SWEEP_POINTS = 200_000;
 const PER_DECADE: ValueSpec = { unit: "number", range: { from: 1, to: 10_000, whole: true } };
-
-/** Points of a sweep that has both ends and an even spacing on the logarithmic axis. */
-export const sweepPoints = ({ fromHz, toHz, perDecade }: ResolvedSweep): number =>
-  Math.ceil(perDecade * Math.log10(toHz / fromHz) - 1e-9) + 1;
 
 export function resolveSweep(sweep: SweepDocument = {}, reader: ValueReader): ResolvedSweep {
   const fromHz = reader.value(["sweep", "from"], sweep.from, positive("hertz"), DEFAULT_SWEEP.fromHz);
@@ -38,9 +30,9 @@ export function resolveSweep(sweep: SweepDocument = {}, reader: ValueReader): Re
         : notAbove(["sweep", "to"], sweep.to, fromHz),
     );
   }
-  const points = sweepPoints({ fromHz, toHz, perDecade });
-  if (points > MAX_SWEEP_POINTS) {
-    reader.refuse(problemAt(["sweep"], `it has ${points} points`, `at most ${MAX_SWEEP_POINTS} points`));
+  const points = sweepLength({ fromHz, toHz, perDecade });
+  if (points > MOST_SWEEP_POINTS) {
+    reader.refuse(problemAt(["sweep"], `it has ${points} points`, `at most ${MOST_SWEEP_POINTS} points`));
   }
   return { fromHz, toHz, perDecade };
 }
