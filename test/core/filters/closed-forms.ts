@@ -9,10 +9,11 @@ export function closedFormLoss({ family, order, rippleDb, stopDb }: PrototypeSpe
     case "butterworth":
       return 1 + x ** (2 * order);
     case "chebyshev":
-      return 1 + (10 ** (rippleDb! / 10) - 1) * chebyshevPolynomial(order, x) ** 2;
+      return 1 + excess(rippleDb!) * chebyshevPolynomial(order, x) ** 2;
     case "inverse-chebyshev": {
-      const height = Math.sqrt(10 ** (stopDb! / 10) - 1);
-      const edge = Math.cosh(Math.acosh(height) / order);
+      const height = Math.sqrt(excess(stopDb!));
+      // Tn(edge) = height; below half power of stop-band loss that lies within Tn's own ripple.
+      const edge = height > 1 ? Math.cosh(Math.acosh(height) / order) : Math.cos(Math.acos(height) / order);
       return 1 + (height / chebyshevPolynomial(order, edge / x)) ** 2;
     }
     case "bessel":
@@ -21,6 +22,9 @@ export function closedFormLoss({ family, order, rippleDb, stopDb }: PrototypeSpe
       throw new Error("no simple closed form");
   }
 }
+
+/** `10^(dB/10) − 1`. */
+export const excess = (lossDb: number): number => Math.expm1((lossDb * Math.LN10) / 10);
 
 /** |Tn(x)|, x ≥ 0. For odd n through the sine, which keeps its digits near the zero at x = 0. */
 export function chebyshevPolynomial(order: number, x: number): number {

@@ -83,6 +83,6 @@ export type FullPrototypeSpec = PrototypeSpec & { readonly rippleDb: number; rea
 export const prototypeSpecs: fc.Arbitrary<FullPrototypeSpec> = fc.record({
   family: fc.constantFrom(...FILTER_FAMILIES),
   order: fc.integer({ min: 1, max: 30 }),
-  rippleDb: fc.double({ min: 0.001, max: 3, noNaN: true }),
-  stopDb: fc.double({ min: 10, max: 160, noNaN: true }),
+  rippleDb: fc.double({ min: -6, max: 1, noNaN: true }).map((decades) => 10 ** decades),
+  stopDb: fc.double({ min: 1, max: 400, noNaN: true }),
 });
