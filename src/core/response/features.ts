@@ -1,0 +1,103 @@
+import { findLeast, findZero } from "../brent.ts";
+import type { Chain } from "../chain.ts";
+import { readAt } from "./exact.ts";
+import { logSpaced } from "./grid.ts";
+import { marksOf } from "./marks.ts";
+
+/** Points per decade of the search between the marks. */
+const SEARCH_PER_DECADE = 40;
+
+/** One point of the exact gain. */
+export interface GainPoint {
+  readonly freqHz: number;
+  /** −Infinity at a null. */
+  readonly gainDb: number;
+}
+
+/** A greatest or least gain, local, or a null. */
+export interface Extreme extends GainPoint {
+  readonly what: "peak" | "dip" | "null";
+}
+
+/**
+ * The gain between two frequencies on a grid that no peak or notch can hide in: equal logarithmic steps, and beside
+ * every complex root. Ascending; where there is no value there is no point.
+ */
+export function gainPoints(chain: Chain, fromHz: number, toHz: number): readonly GainPoint[] {
+  const count = Math.max(3, Math.ceil(Math.log10(toHz / fromHz) * SEARCH_PER_DECADE) + 1);
+  return [...logSpaced(fromHz, toHz, count), ...marksOf(chain, fromHz, toHz)]
+    .sort((a, b) => a - b)
+    .map((freqHz) => ({ freqHz, gainDb: readAt(chain, freqHz).gainDb }))
+    .filter((point) => !Number.isNaN(point.gainDb));
+}
+
+/** Less than this below its surroundings a dip is rounding; in dB. */
+const LEAST_DEPTH_DB = 1e-9;
+/** So far down a dip that goes on falling to the last digit of its frequency is a null. */
+const NULL_DB = -240;
+
+/** Local peaks, dips and nulls between two frequencies, ascending, each refined on the exact response. */
+export function extremes(chain: Chain, points: readonly GainPoint[]): readonly Extreme[] {
+  const found: Extreme[] = [];
+  for (let k = 1; k + 1 < points.length; k++) {
+    const [before, here, after] = [points[k - 1], points[k], points[k + 1]];
+    if (rises(before, here) && rises(after, here)) found.push(refine(chain, before, after, "peak"));
+    if (rises(here, before) && rises(here, after)) found.push(refineDip(chain, before, here, after));
+  }
+  return found;
+}
+
+const rises = (from: GainPoint, to: GainPoint): boolean => to.gainDb - from.gainDb > LEAST_DEPTH_DB;
+
+function refineDip(chain: Chain, before: GainPoint, here: GainPoint, after: GainPoint): Extreme {
+  if (here.gainDb === -Infinity) return { ...here, what: "null" };
+  const dip = refine(chain, before, after, "dip");
+  const lower = dip.gainDb <= here.gainDb ? dip : { ...here, what: "dip" as const };
+  const top = Math.max(before.gainDb, after.gainDb);
+  return lower.gainDb - top < NULL_DB + 60 && lower.gainDb < NULL_DB ? { ...lower, what: "null" } : lower;
+}
+
+function refine(chain: Chain, before: GainPoint, after: GainPoint, what: "peak" | "dip"): Extreme {
+  const sign = what === "peak" ? -1 : 1;
+  const gainAt = (logFreq: number) => readAt(chain, Math.exp(logFreq)).gainDb;
+  const freqHz = Math.exp(
+    findLeast((x) => sign * gainAt(x), Math.log(before.freqHz), Math.log(after.freqHz)),
+  );
+  return { freqHz, gainDb: readAt(chain, freqHz).gainDb, what };
+}
+
+/**
+ * Frequencies at which the gain passes a level (dB), ascending, to the last digits. Between two points of the search
+ * the gain also turns at its extremes: those are looked at too, so that a pair of crossings is not missed.
+ */
+export function crossings(chain: Chain, points: readonly GainPoint[], levelDb: number): readonly number[] {
+  const turns = [...points, ...extremes(chain, points)].sort((a, b) => a.freqHz - b.freqHz);
+  const found: number[] = [];
+  for (let k = 0; k + 1 < turns.length; k++) {
+    const [here, next] = [turns[k], turns[k + 1]];
+    if (here.gainDb === levelDb) found.push(here.freqHz);
+    else if (here.gainDb > levelDb !== next.gainDb > levelDb && next.gainDb !== levelDb) {
+      found.push(crossing(chain, here.freqHz, next.freqHz, levelDb));
+    }
+  }
+  const last = turns[turns.length - 1];
+  if (last?.gainDb === levelDb) found.push(last.freqHz);
+  return found;
+}
+
+/** A null has no finite level to interpolate with; it stands for one that is lower than any. */
+const FLOOR_DB = -1e4;
+
+function crossing(chain: Chain, fromHz: number, toHz: number, levelDb: number): number {
+  const above = (x: number) => Math.max(FLOOR_DB, readAt(chain, Math.exp(x)).gainDb) - levelDb;
+  return Math.exp(findZero(above, Math.log(fromHz), Math.log(toHz)));
+}
+
+/** The greatest gain between two frequencies, its own frequency refined; undefined where there is no value. */
+export function greatestGain(chain: Chain, points: readonly GainPoint[]): GainPoint | undefined {
+  const peaks = extremes(chain, points).filter((extreme) => extreme.what === "peak");
+  return [...points, ...peaks].reduce<GainPoint | undefined>(
+    (best, point) => (best === undefined || point.gainDb > best.gainDb ? point : best),
+    undefined,
+  );
+}
