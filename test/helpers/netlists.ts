@@ -80,9 +80,20 @@ export type Against = "emf" | "input" | "insertion";
 
 /** V(load) over the EMF, over V(input), or over what the load gets straight from the source. */
 export function nodalGain(chain: FileChain, freqHz: number, against: Against = "emf"): Complex {
-  const { emf, nodes } = readNodes(chain, freqHz);
-  const out = nodes[nodes.length - 1].voltage;
-  if (against === "emf") return over(out, emf);
-  if (against === "input") return over(out, nodes[0].voltage);
-  return over(out, readNodes({ ...chain, stages: [] }, freqHz).nodes[0].voltage);
+  const reading = readNodes(chain, freqHz);
+  return over(outputOf(reading), referenceOf(reading, chain, freqHz, against));
+}
+
+/** The three gains of a chain already read. */
+export function gainsOf(reading: ChainReading, chain: FileChain, freqHz: number): Record<Against, Complex> {
+  const gain = (against: Against) => over(outputOf(reading), referenceOf(reading, chain, freqHz, against));
+  return { emf: gain("emf"), input: gain("input"), insertion: gain("insertion") };
+}
+
+const outputOf = ({ nodes }: ChainReading): Complex => nodes[nodes.length - 1].voltage;
+
+function referenceOf(reading: ChainReading, chain: FileChain, freqHz: number, against: Against): Complex {
+  if (against === "emf") return reading.emf;
+  if (against === "input") return reading.nodes[0].voltage;
+  return readNodes({ ...chain, stages: [] }, freqHz).nodes[0].voltage;
 }

@@ -15,7 +15,7 @@ export const times = (a: Complex, b: Complex): Complex =>
 
 export const scaled = (a: Complex, factor: number): Complex => complex(a.re * factor, a.im * factor);
 
-export const magnitude = (a: Complex): number => Math.hypot(a.re, a.im);
+export const magnitude = (a: Complex): number => Math.sqrt(a.re * a.re + a.im * a.im);
 
 export function over(a: Complex, b: Complex): Complex {
   const square = b.re * b.re + b.im * b.im;
