@@ -21,27 +21,40 @@ const SAMPLE_LINES = 20;
 const SAMPLE_CHARACTERS = 10_000;
 
 /**
- * The first of semicolon, tab and comma that stands in most of the first rows; else blanks. Where no line begins like a
- * number, all lines count as rows.
+ * The one of semicolon, tab and comma that stands in most rows, if it stands in half of them; else blanks. Where no line
+ * begins like a number, all lines count as rows.
  */
 export function detectSeparator(text: string): Separator {
   const lines = sampleOf(text);
   const rows = lines.filter((line) => /^[-+\u2212]?[.,]?\d/.test(line));
   const sample = rows.length > 0 ? rows : lines;
-  const isCommon = ({ code }: Separator) => {
-    const mark = String.fromCharCode(code);
-    return sample.filter((line) => line.includes(mark)).length * 2 > sample.length;
-  };
-  return CANDIDATES.find(isCommon) ?? BLANKS;
+  let best = BLANKS;
+  let most = 0;
+  for (const candidate of CANDIDATES) {
+    const count = sample.filter((line) => isSplitBy(line, candidate)).length;
+    if (count <= most || count * 2 < sample.length) continue;
+    best = candidate;
+    most = count;
+  }
+  return best;
 }
 
-/** First lines with content, what is in quotation marks blanked out to `0`. */
+/** A tab among blanks is a blank: between tabs no field is two numbers. */
+function isSplitBy(line: string, { code }: Separator): boolean {
+  const fields = line.split(String.fromCharCode(code));
+  return fields.length > 1 && (code !== TAB.code || !fields.some((field) => TWO_NUMBERS.test(field)));
+}
+
+const TWO_NUMBERS = /^\s*[-+\d.eE]+ +[-+\d.eE]+\s*$/;
+
+/** First lines with content, without trailing comments; what is in quotation marks is blanked out to `0`. */
 function sampleOf(text: string): string[] {
   const lines = new Lines(text);
   const sample: string[] = [];
   while (sample.length < SAMPLE_LINES && lines.advanceToContent(COMMENT_MARKS)) {
     const line = text.slice(lines.start, Math.min(lines.end, lines.start + SAMPLE_CHARACTERS));
-    sample.push(line.replace(/"[^"]*"/g, (field) => (/\d/.test(field[1]) ? "0" : "")).trim());
+    const unquoted = line.replace(/"[^"]*"/g, (field) => (/\d/.test(field[1]) ? "0" : ""));
+    sample.push(unquoted.replace(/\s[#!%].*$/, "").trim());
   }
   return sample;
 }

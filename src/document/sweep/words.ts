@@ -67,7 +67,7 @@ export const OTHER: ReadonlySet<string> = new Set(OTHER_WORDS.split(" "));
 
 const WORD = /[\p{L}\p{N}]+|[°∠]/gu;
 /** Units whose capital would be taken for the start of a word. */
-const CAPITAL_INSIDE = /dB(?![a-z])|kHz|mHz|mV/g;
+const CAPITAL_INSIDE = /dB(?![a-z])|kHz|mHz|[muµμ]V/g;
 
 /** Lower-case words of a header cell: `freqHz`, `Freq_(Hz)` and `freq/Hz` all give `freq` and `hz`. */
 export function wordsOf(cell: string): string[] {
