@@ -1,6 +1,6 @@
 // Bundles the program into dist/: one entry file, with mathjs and the full screen in chunks of their own that are
 // read only when a formula stage or the workstation asks for them.
-import { rmSync } from "node:fs";
+import { chmodSync, rmSync } from "node:fs";
 import { build } from "esbuild";
 
 rmSync("dist", { recursive: true, force: true });
@@ -12,6 +12,8 @@ await build({
   format: "esm",
   platform: "node",
   target: "node20",
+  // As ES modules where a library has both: only those can be put into the bundle in parts.
+  mainFields: ["module", "main"],
   minify: true,
   keepNames: false,
   legalComments: "none",
@@ -23,3 +25,4 @@ await build({
     js: 'import { createRequire as __createRequire } from "node:module"; const require = __createRequire(import.meta.url);',
   },
 });
+chmodSync("dist/halfpower.js", 0o755);
