@@ -1,0 +1,106 @@
+import { type Command, CommanderError } from "commander";
+import { fail, ok } from "../core/result.ts";
+import { plainText } from "../core/text.ts";
+import type { Charset } from "../core/units/format.ts";
+import { codeOf, type FileProblem, fileProblemText, systemProblem } from "../effects/file-problem.ts";
+import { decideDisplay, type ScreenDisplay } from "../effects/terminal/display.ts";
+import { toAscii } from "./ascii.ts";
+import { sheet } from "./commands/sheet.ts";
+import type { CliIo, Session } from "./io.ts";
+import { DONE, type Outcome, REFUSED } from "./outcome.ts";
+import { program, type Run } from "./program.ts";
+import { usageProblem } from "./usage.ts";
+
+/** What opens the full screen, and what it resolves to when it is left. */
+export type OpenWorkstation = (options: {
+  readonly chain?: string;
+  readonly display: ScreenDisplay;
+}) => Promise<number>;
+
+/**
+ * One run of the program: results to standard output, messages to standard error. Resolves to the exit status and
+ * never rejects: 0 done, 1 limits not met, 2 bad usage or input.
+ */
+export async function runCli(
+  argv: readonly string[],
+  io: CliIo,
+  openWorkstation?: OpenWorkstation,
+): Promise<number> {
+  const display = decideDisplay(io.env, io.stdin, io.stdout, { ascii: wantsAscii(argv) });
+  const session: Session = { io, charset: display.unicode ? "unicode" : "ascii" };
+  const open = async (chain: string | undefined): Promise<Outcome> => {
+    if (display.mode === "sheet" || openWorkstation === undefined) return sheet(session, chain);
+    const exitCode = await openWorkstation({ ...(chain === undefined ? {} : { chain }), display });
+    return ok({ text: "", exitCode });
+  };
+  try {
+    return await deliver(await outcomeOf(argv, session, open), session);
+  } catch (error) {
+    return afterFault(error, session);
+  }
+}
+
+/** Known before the command line is read, because what is wrong with it is said in ASCII too. */
+function wantsAscii(argv: readonly string[]): boolean {
+  const end = argv.indexOf("--");
+  return argv.slice(0, end < 0 ? argv.length : end).includes("--ascii");
+}
+
+async function outcomeOf(argv: readonly string[], session: Session, open: Run["open"]): Promise<Outcome> {
+  let outcome: Outcome = ok({ text: "" });
+  let help = "";
+  const settle = async (work: Promise<Outcome>) => {
+    outcome = await work;
+  };
+  const root = program({ session, settle, open }, (text) => {
+    help += text;
+  });
+  let stopped = root;
+  for (const command of withCommands(root)) {
+    command.exitOverride((error) => {
+      stopped = command;
+      throw error;
+    });
+  }
+  try {
+    await root.parseAsync([...argv], { from: "user" });
+    return outcome;
+  } catch (error) {
+    if (!(error instanceof CommanderError)) throw error;
+    if (error.exitCode === 0) return ok({ text: help });
+    return fail(usageProblem(error, stopped));
+  }
+}
+
+const withCommands = (command: Command): readonly Command[] => [
+  command,
+  ...command.commands.flatMap(withCommands),
+];
+
+async function deliver(outcome: Outcome, { io, charset }: Session): Promise<number> {
+  if (!outcome.ok) {
+    await tell(outcome.problem, io, charset);
+    return REFUSED;
+  }
+  const { text, notes = [], exitCode = DONE } = outcome.value;
+  for (const note of notes) await io.stderr.write(asciiIf(`halfpower: ${note}\n`, charset));
+  if (text !== "") await io.stdout.write(asciiIf(text, charset));
+  return exitCode;
+}
+
+const tell = (problem: FileProblem, io: CliIo, charset: Charset): Promise<void> =>
+  io.stderr.write(asciiIf(`halfpower: ${fileProblemText(problem)}\n`, charset));
+
+const asciiIf = (text: string, charset: Charset): string => (charset === "ascii" ? toAscii(text) : text);
+
+/** Writing that fails is the system's word; anything else is a fault of the program, told in one line. */
+async function afterFault(error: unknown, { io, charset }: Session): Promise<number> {
+  // Whoever read the other end has seen enough.
+  if (codeOf(error) === "EPIPE") return DONE;
+  const said =
+    codeOf(error) === undefined
+      ? `internal fault: ${plainText(error instanceof Error ? error.message : String(error), 500)}`
+      : fileProblemText(systemProblem(error, "standard output"));
+  await io.stderr.write(asciiIf(`halfpower: ${said}\n`, charset)).catch(() => undefined);
+  return REFUSED;
+}
