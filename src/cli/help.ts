@@ -1,10 +1,14 @@
 /** Texts of `--help` beyond the list of commands and options. */
 
-export const SUMMARY = `Frequency response of a measuring chain as it is really wired: source, stages and
-load, every stage loading the one before it. Step along frequency and read
-decibels and degrees, and keep chains as files and presets.`;
+export const SUMMARY =
+  "Frequency response of a measuring chain as it is really wired: source, stages and load, every stage " +
+  "loading the one before it. Step along frequency and read decibels and degrees, and keep chains as files " +
+  "and presets.";
 
 export const CHAIN_HELP = 'a chain file, "-" for standard input, or a preset\'s name';
+
+/** The option is looked for before anything else is read (see run.ts); the commands only have to know it. */
+export const ASCII_HELP = "plain ASCII only";
 
 export const WITHOUT_COMMAND = `Without a command the workstation opens with CHAIN, or with the preset
 strain-bridge. Where standard output or input is no terminal, the sheet is

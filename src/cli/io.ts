@@ -1,5 +1,5 @@
 import type { Charset } from "../core/units/format.ts";
-import type { AppFolders } from "../effects/paths.ts";
+import type { PresetStore } from "./preset-store.ts";
 
 /** The streams and the environment of one run, so that tests can stand in for them. */
 export interface CliIo {
@@ -7,7 +7,8 @@ export interface CliIo {
   readonly stdin: AsyncIterable<Uint8Array | string> & { readonly isTTY?: boolean };
   readonly stdout: CliOutput;
   readonly stderr: CliOutput;
-  readonly folders: AppFolders;
+  /** Absent where presets cannot be had. */
+  readonly presets?: PresetStore;
 }
 
 export interface CliOutput {

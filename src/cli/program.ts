@@ -2,10 +2,11 @@ import { Command } from "commander";
 import manifest from "../../package.json" with { type: "json" };
 import { read } from "./commands/read.ts";
 import { type SweepOptions, sweep } from "./commands/sweep.ts";
-import { CAUTION, CHAIN_HELP, example, STATUS, SUMMARY, WITHOUT_COMMAND } from "./help.ts";
+import { ASCII_HELP, CAUTION, CHAIN_HELP, example, STATUS, SUMMARY, WITHOUT_COMMAND } from "./help.ts";
 import type { Session } from "./io.ts";
 import type { Outcome } from "./outcome.ts";
 import type { FormOptions } from "./output-form.ts";
+import { addPresets } from "./program-presets.ts";
 
 /** What the commands work with and hand their outcome to. */
 export interface Run {
@@ -26,6 +27,8 @@ export function program(run: Run, write: (text: string) => void): Command {
     .action((chain: string | undefined) => run.settle(run.open(chain)));
   addRead(root, run);
   addSweep(root, run);
+  const { presets } = run.session.io;
+  if (presets !== undefined) addPresets(root, run, presets);
   return root;
 }
 
@@ -47,9 +50,6 @@ function rootCommand(write: (text: string) => void): Command {
     .version(manifest.version, "-V, --version", "show the version")
     .option("--ascii", ASCII_HELP);
 }
-
-/** Looked for before anything else is read (see run.ts); the commands only have to know it. */
-export const ASCII_HELP = "plain ASCII only";
 
 function addRead(root: Command, { session, settle }: Run): void {
   root

@@ -2,7 +2,7 @@ import { type Command, CommanderError } from "commander";
 import { fail, ok } from "../core/result.ts";
 import { plainText } from "../core/text.ts";
 import type { Charset } from "../core/units/format.ts";
-import { codeOf, type FileProblem, fileProblemText, systemProblem } from "../effects/file-problem.ts";
+import { codeOf, fileProblemText, systemProblem } from "../effects/file-problem.ts";
 import { decideDisplay, type ScreenDisplay } from "../effects/terminal/display.ts";
 import { toAscii } from "./ascii.ts";
 import { sheet } from "./commands/sheet.ts";
@@ -78,18 +78,17 @@ const withCommands = (command: Command): readonly Command[] => [
 ];
 
 async function deliver(outcome: Outcome, { io, charset }: Session): Promise<number> {
+  const tell = (message: string) => io.stderr.write(asciiIf(`halfpower: ${message}\n`, charset));
+  for (const note of io.presets?.notes() ?? []) await tell(note);
   if (!outcome.ok) {
-    await tell(outcome.problem, io, charset);
+    await tell(fileProblemText(outcome.problem));
     return REFUSED;
   }
   const { text, notes = [], exitCode = DONE } = outcome.value;
-  for (const note of notes) await io.stderr.write(asciiIf(`halfpower: ${note}\n`, charset));
+  for (const note of notes) await tell(note);
   if (text !== "") await io.stdout.write(asciiIf(text, charset));
   return exitCode;
 }
-
-const tell = (problem: FileProblem, io: CliIo, charset: Charset): Promise<void> =>
-  io.stderr.write(asciiIf(`halfpower: ${fileProblemText(problem)}\n`, charset));
 
 const asciiIf = (text: string, charset: Charset): string => (charset === "ascii" ? toAscii(text) : text);
 

@@ -1,14 +1,12 @@
-import { appFolders } from "../effects/paths.ts";
 import type { CliIo, CliOutput } from "./io.ts";
 
-/** The process's own streams, environment and folders. */
+/** The process's own streams, environment and presets. */
 export function systemIo(): CliIo {
   return {
     env: process.env,
     stdin: process.stdin,
     stdout: output(process.stdout),
     stderr: output(process.stderr),
-    folders: appFolders(),
   };
 }
 

@@ -7,7 +7,7 @@ type Words = readonly [found: string, allowed: string];
 
 /** What is wrong with the command line, in the program's own words. */
 export function usageProblem(error: CommanderError, command: Command): FileProblem {
-  return fileProblem(placeOf(command), ...(misspeltCommand(error, command) ?? wordsFor(error, command)));
+  return misspeltCommand(error, command) ?? fileProblem(placeOf(command), ...wordsFor(error, command));
 }
 
 function wordsFor({ code, message }: CommanderError, command: Command): Words {
@@ -45,7 +45,7 @@ function usageText(command: Command): string {
 }
 
 /** Where a command with commands of its own, or the default of one, got a word that is none of them. */
-function misspeltCommand({ code }: CommanderError, command: Command): Words | undefined {
+function misspeltCommand({ code }: CommanderError, command: Command): FileProblem | undefined {
   const group = command.commands.length > 0 ? command : command.parent?.parent ? command.parent : null;
   const [word] = command.args;
   if (group === null || word === undefined || word.startsWith("-")) return undefined;
@@ -53,7 +53,7 @@ function misspeltCommand({ code }: CommanderError, command: Command): Words | un
   if (group !== command && (command.registeredArguments.length > 0 || names.includes(word))) return undefined;
   const isNear = nearNames(word, names).length > 0;
   if (code !== "commander.excessArguments" && !isNear) return undefined;
-  return [`there is no command ${quoted(word)}`, suggestion(word, names)];
+  return fileProblem(placeOf(group), `there is no command ${quoted(word)}`, suggestion(word, names));
 }
 
 function unknownOption(flag: string, command: Command): Words {

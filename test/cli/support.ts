@@ -2,6 +2,7 @@ import { mkdtempSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import type { CliIo } from "../../src/cli/io.ts";
+import type { PresetStore } from "../../src/cli/preset-store.ts";
 import { runCli } from "../../src/cli/run.ts";
 
 export interface Ran {
@@ -13,7 +14,7 @@ export interface Ran {
 export interface RunSettings {
   readonly env?: Readonly<Record<string, string>>;
   readonly input?: string;
-  readonly folders?: CliIo["folders"];
+  readonly presets?: PresetStore;
 }
 
 export const folder = (): string => mkdtempSync(join(tmpdir(), "halfpower-cli-"));
@@ -24,11 +25,6 @@ export function fileOf(content: string | object, name = "pump.chain.json"): stri
   writeFileSync(path, typeof content === "string" ? content : JSON.stringify(content));
   return path;
 }
-
-export const noFolders = (): CliIo["folders"] => {
-  const base = folder();
-  return { config: join(base, "config"), state: join(base, "state"), shipped: join(base, "shipped") };
-};
 
 /** Runs the program in this process, in a UTF-8 locale unless told otherwise, and keeps what it writes. */
 export async function run(argv: readonly string[], settings: RunSettings = {}): Promise<Ran> {
@@ -45,7 +41,7 @@ export async function run(argv: readonly string[], settings: RunSettings = {}): 
     })(),
     stdout: output("stdout"),
     stderr: output("stderr"),
-    folders: settings.folders ?? noFolders(),
+    ...(settings.presets === undefined ? {} : { presets: settings.presets }),
   };
   const exitCode = await runCli(argv, io);
   return { exitCode, ...written };

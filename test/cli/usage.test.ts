@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import manifest from "../../package.json" with { type: "json" };
 import { runCli } from "../../src/cli/run.ts";
-import { ASCII, fileOf, lowpass, noFolders, run } from "./support.ts";
+import { ASCII, fileOf, lowpass, run } from "./support.ts";
 
 describe("the command line", () => {
   it.each([
@@ -13,10 +13,7 @@ describe("the command line", () => {
       'sweep: there is no option "--perdecad"; allowed is for example --per-decade',
     ],
     [["swep", "x", "--from", "1"], 'command line: there is no command "swep"; allowed is for example sweep'],
-    [
-      ["reads", "x", "1k"],
-      'command line: there is no command "reads"; allowed is for example read',
-    ],
+    [["reads", "x", "1k"], 'command line: there is no command "reads"; allowed is for example read'],
     [["read"], "read: CHAIN is missing; allowed is halfpower read CHAIN FREQ..."],
     [["read", "x"], "read: FREQ is missing; allowed is halfpower read CHAIN FREQ..."],
     [["sweep"], "sweep: CHAIN is missing; allowed is halfpower sweep CHAIN"],
@@ -43,7 +40,6 @@ describe("the command line", () => {
         stdin,
         stdout: output,
         stderr: output,
-        folders: noFolders(),
       };
       return runCli([fileOf(lowpass())], io, async ({ chain, display }) => {
         opened.push([chain?.endsWith("pump.chain.json"), display.mode]);
@@ -69,7 +65,6 @@ describe("a fault", () => {
           stderr += text;
         },
       },
-      folders: noFolders(),
     };
     return { exitCode: await runCli(["read", fileOf(lowpass()), "1k"], io), stderr };
   };
