@@ -4,6 +4,7 @@ import { heading } from "../heading.ts";
 import type { Session } from "../io.ts";
 import type { Outcome } from "../outcome.ts";
 import { chainLines } from "../sheet/chain-lines.ts";
+import { chartLines } from "../sheet/chart-lines.ts";
 import { readingLines } from "../sheet/reading-lines.ts";
 import { wrapped } from "../sheet/wrap.ts";
 
@@ -25,6 +26,8 @@ export async function sheet(session: Session, chainArgument = DEMO_CHAIN): Promi
     ...heading(resolved).flatMap((line) => wrapped(line, columns)),
     "",
     ...(await chainLines(resolved, document, columns, charset)),
+    "",
+    ...chartLines(resolved, columns, charset),
     "",
     ...(await readingLines(resolved, charset)),
   ];
