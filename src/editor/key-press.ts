@@ -1,0 +1,9 @@
+/** A key as the editor is told of it; the terminal module makes these. */
+export interface KeyPress {
+  readonly name: string;
+  /** One character for the name "character", the text of a "paste", else empty. */
+  readonly text: string;
+  readonly ctrl: boolean;
+  readonly alt: boolean;
+  readonly shift: boolean;
+}
