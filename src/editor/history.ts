@@ -28,7 +28,10 @@ export function stepBack(
 ): { readonly step: Step; readonly history: History } | undefined {
   const step = past.at(-1);
   if (step === undefined) return undefined;
-  return { step, history: { past: past.slice(0, -1), future: [...future, { name: step.name, document: now }] } };
+  return {
+    step,
+    history: { past: past.slice(0, -1), future: [...future, { name: step.name, document: now }] },
+  };
 }
 
 export function stepForward(
@@ -37,5 +40,8 @@ export function stepForward(
 ): { readonly step: Step; readonly history: History } | undefined {
   const step = future.at(-1);
   if (step === undefined) return undefined;
-  return { step, history: { past: [...past, { name: step.name, document: now }], future: future.slice(0, -1) } };
+  return {
+    step,
+    history: { past: [...past, { name: step.name, document: now }], future: future.slice(0, -1) },
+  };
 }

@@ -7,3 +7,9 @@ export interface KeyPress {
   readonly alt: boolean;
   readonly shift: boolean;
 }
+
+/** One word for a key: `left`, `shift+left`, `ctrl+r`, `a`, `space`. */
+export function keyWord({ name, text, ctrl, alt, shift }: KeyPress): string {
+  const base = name === "character" ? (text === " " ? "space" : text) : name;
+  return `${ctrl ? "ctrl+" : ""}${alt ? "alt+" : ""}${shift ? "shift+" : ""}${base}`;
+}

@@ -2,7 +2,7 @@ import { stageKind } from "../core/stages/index.ts";
 import type { NumberSpec, PartSpec } from "../core/stages/kind.ts";
 import type { UnitTag } from "../core/units/unit.ts";
 import type { DocumentPath } from "../document/problem.ts";
-import type { ChainDocument, RawValue, StageDocument } from "../document/types.ts";
+import type { ChainDocument, LimitDocument, RawValue, StageDocument } from "../document/types.ts";
 import { valueAt } from "./document-edit.ts";
 
 /** A row of the chain list, in the order in which the signal meets it. */
@@ -11,7 +11,8 @@ export type Row =
   | { readonly type: "source" }
   | { readonly type: "stage"; readonly index: number; readonly stage: StageDocument }
   | { readonly type: "load" }
-  | { readonly type: "converter" };
+  | { readonly type: "converter" }
+  | { readonly type: "limit"; readonly index: number; readonly limit: LimitDocument };
 
 export function rowsOf(document: ChainDocument): readonly Row[] {
   return [
@@ -20,11 +21,16 @@ export function rowsOf(document: ChainDocument): readonly Row[] {
     ...document.stages.map((stage, index) => ({ type: "stage", index, stage }) as const),
     { type: "load" },
     { type: "converter" },
+    ...(document.limits ?? []).map((limit, index) => ({ type: "limit", index, limit }) as const),
   ];
 }
 
 /** The row number of a stage: chain and source come before. */
 export const rowOfStage = (index: number): number => index + 2;
+
+/** The row number of a limit: they come last, behind load and converter. */
+export const rowOfLimit = (document: ChainDocument, index: number): number =>
+  document.stages.length + 4 + index;
 
 /** One value that can be edited, by its place in the document. */
 export interface Field {
@@ -58,6 +64,8 @@ export function fieldsOf(document: ChainDocument, row: Row): readonly Field[] {
       return LOAD_FIELDS.map((field) => placed(document, field));
     case "converter":
       return CONVERTER_FIELDS.map((field) => placed(document, field));
+    case "limit":
+      return limitFields(row.index, row.limit).map((field) => placed(document, field));
   }
 }
 
@@ -67,15 +75,17 @@ function stageFields(stage: StageDocument, index: number): readonly Field[] {
   const constants = Object.keys(given).filter((name) => !specs.some((spec) => spec.name === name));
   return [
     ...specs.map((spec) => partField(spec, stage, index)),
-    ...constants.map((name): Field => ({
-      label: name,
-      what: "constant of the formula",
-      path: ["stages", index, "parts", name],
-      type: "number",
-      unit: "number",
-      raw: given[name],
-      optional: false,
-    })),
+    ...constants.map(
+      (name): Field => ({
+        label: name,
+        what: "constant of the formula",
+        path: ["stages", index, "parts", name],
+        type: "number",
+        unit: "number",
+        raw: given[name],
+        optional: false,
+      }),
+    ),
   ];
 }
 
@@ -117,7 +127,13 @@ const placed = (document: ChainDocument, field: Unplaced): Field => ({
   raw: valueAt(document, field.path) as RawValue | undefined,
 });
 
-const number = (label: string, what: string, path: DocumentPath, unit: UnitTag, fallback?: string): Unplaced => ({
+const number = (
+  label: string,
+  what: string,
+  path: DocumentPath,
+  unit: UnitTag,
+  fallback?: string,
+): Unplaced => ({
   label,
   what,
   path,
@@ -125,6 +141,33 @@ const number = (label: string, what: string, path: DocumentPath, unit: UnitTag, 
   unit,
   ...(fallback === undefined ? {} : { fallback }),
 });
+
+function limitFields(index: number, { quantity }: LimitDocument): readonly Unplaced[] {
+  const at = (name: keyof LimitDocument): DocumentPath => ["limits", index, name];
+  const unit = LIMIT_UNITS[quantity];
+  return [
+    { label: "name", what: "name of the limit", path: at("name"), type: "text" },
+    {
+      label: "quantity",
+      what: "what is bounded",
+      path: at("quantity"),
+      type: "choice",
+      choices: ["gain", "phase", "delay"],
+      optional: false,
+    },
+    { ...number("from", "where it begins", at("from"), "hertz"), optional: false },
+    { ...number("to", "where it ends", at("to"), "hertz"), optional: false },
+    number("atLeast", "lower bound", at("atLeast"), unit),
+    number("atMost", "upper bound", at("atMost"), unit),
+    ...(quantity === "gain" ? [number("re", "frequency whose gain is the zero", at("re"), "hertz")] : []),
+  ];
+}
+
+const LIMIT_UNITS: Readonly<Record<LimitDocument["quantity"], UnitTag>> = {
+  gain: "level",
+  phase: "degree",
+  delay: "second",
+};
 
 const joined = (end: "source" | "load", fallback: string): Unplaced => ({
   label: "joined",
@@ -149,6 +192,14 @@ const CHAIN_FIELDS: readonly Unplaced[] = [
   number("to", "end of the sweep", ["sweep", "to"], "hertz", "1 MHz"),
   { ...number("per decade", "points per decade", ["sweep", "perDecade"], "number", "50"), whole: true },
   number("temperature", "temperature of the chain", ["temperature"], "celsius", "25 °C"),
+  {
+    label: "spread",
+    what: "how parts vary within their tolerance",
+    path: ["distribution"],
+    type: "choice",
+    choices: ["uniform", "normal"],
+    fallback: "uniform",
+  },
   { label: "notes", what: "notes", path: ["notes"], type: "text" },
 ];
 

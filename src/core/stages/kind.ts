@@ -57,6 +57,8 @@ interface SpecBase {
   readonly optional: boolean;
   /** Text the chooser starts with; absent for an optional part that starts left out. */
   readonly initial?: string;
+  /** What an optional part begins with once another part's choice asks for it. */
+  readonly suggested?: string;
 }
 
 export interface NumberSpec extends SpecBase {
@@ -120,6 +122,13 @@ export const plain = number("number", "positive");
 export const orZero = (spec: NumberSpec): NumberSpec => ({ ...spec, range: "nonNegative" });
 
 export const optional = <S extends PartSpec>(spec: S): S => ({ ...spec, optional: true });
+
+/** Left out until another part's choice asks for it. */
+export const suggested = <S extends PartSpec>(spec: S, text: string): S => ({
+  ...spec,
+  optional: true,
+  suggested: text,
+});
 
 export const whole = (from: number, to: number): NumberRange => ({ from, to, whole: true });
 

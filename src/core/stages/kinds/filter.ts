@@ -2,7 +2,7 @@ import { isolating } from "../../elements/make.ts";
 import { FILTER_FAMILIES, FILTER_SHAPES, HIGHEST_ORDER } from "../../filters/spec.ts";
 import { checkFilterValues, type FilterValues, filterSections } from "../filter-parts.ts";
 import { idealPorts, type PortValues } from "../ideal.ts";
-import { choice, defineKind, frequency, lossDb, optional, plain, whole } from "../kind.ts";
+import { choice, defineKind, frequency, lossDb, optional, plain, suggested, whole } from "../kind.ts";
 
 /** A whole filter of a named family, computed from its order and edges. */
 export const filter = defineKind<FilterValues & PortValues>({
@@ -18,10 +18,10 @@ export const filter = defineKind<FilterValues & PortValues>({
     choice("family", "approximation", FILTER_FAMILIES, "butterworth"),
     plain("order", "order of the low-pass prototype", { range: whole(1, HIGHEST_ORDER), initial: "4" }),
     optional(frequency("corner", "corner of a lowpass or highpass", { initial: "1k" })),
-    optional(frequency("low", "lower corner of a bandpass or bandstop")),
-    optional(frequency("high", "upper corner of a bandpass or bandstop")),
-    optional(lossDb("ripple", "pass-band ripple of chebyshev and elliptic")),
-    optional(lossDb("stop", "least stop-band loss of inverse-chebyshev and elliptic")),
+    suggested(frequency("low", "lower corner of a bandpass or bandstop"), "500"),
+    suggested(frequency("high", "upper corner of a bandpass or bandstop"), "2k"),
+    suggested(lossDb("ripple", "pass-band ripple of chebyshev and elliptic"), "0.5"),
+    suggested(lossDb("stop", "least stop-band loss of inverse-chebyshev and elliptic"), "60"),
     ...idealPorts,
   ],
   check: checkFilterValues,

@@ -2,7 +2,17 @@ import type { Element } from "../../elements/element.ts";
 import { series, shunt } from "../../elements/make.ts";
 import { ladderValues } from "../../filters/ladder-values.ts";
 import type { FilterFamily } from "../../filters/spec.ts";
-import { choice, defineKind, frequency, lossDb, optional, plain, resistance, whole } from "../kind.ts";
+import {
+  choice,
+  defineKind,
+  frequency,
+  lossDb,
+  optional,
+  plain,
+  resistance,
+  suggested,
+  whole,
+} from "../kind.ts";
 
 interface LadderStageValues {
   readonly shape: "lowpass" | "highpass";
@@ -31,7 +41,7 @@ export const ladder = defineKind<LadderStageValues>({
     frequency("corner", "corner; for chebyshev the ripple edge", { initial: "1M" }),
     resistance("Z0", "resistance of the source it is made for", { initial: "50" }),
     choice("first", "first branch: in series (L) or in shunt (C)", ["L", "C"], "L"),
-    optional(lossDb("ripple", "pass-band ripple of chebyshev")),
+    suggested(lossDb("ripple", "pass-band ripple of chebyshev"), "0.5"),
     optional(plain("QL", "unloaded Q of each inductor at the corner")),
   ],
   check: ({ family, order, ripple }) => {

@@ -1,0 +1,101 @@
+import type { ListItem, QuestionDialog } from "../dialog.ts";
+import { chainFileName } from "../file-name.ts";
+import type { PresetLine } from "../message.ts";
+import { type Step, step, told } from "../message.ts";
+import type { EditorState } from "../state.ts";
+import { ask } from "./ask.ts";
+import { putAway } from "./files.ts";
+import { rowInHand } from "./rows.ts";
+import { nameOf } from "./stages.ts";
+
+export const browsePresets = (state: EditorState): Step => step(state, { type: "list-presets" });
+
+/** A preset's place in the list says whose it is and what it is. */
+const groupOf = ({ origin, type }: PresetLine): string =>
+  `${origin === "own" ? "your own" : "shipped"} ${type}s`;
+
+/** The list of presets, the response of the first one asked for at once. */
+export function showPresets(state: EditorState, presets: readonly PresetLine[]): Step {
+  if (presets.length === 0) return told(state, "there are no presets", true);
+  const items = presets.map(
+    (preset): ListItem => ({
+      value: preset.name,
+      label: preset.name,
+      detail: preset.title,
+      group: groupOf(preset),
+    }),
+  );
+  const dialog = {
+    type: "list",
+    purpose: "presets",
+    title: "presets",
+    items,
+    index: 0,
+    filter: { text: "", caret: 0 },
+    look: undefined,
+  } as const;
+  const first = items[0] as ListItem;
+  return step({ ...state, dialog, notice: undefined }, { type: "look-at-preset", name: first.value });
+}
+
+/** Takes a preset: a stage goes in at the row in hand, a chain takes the place of the one there is. */
+export function takePreset(state: EditorState, item: ListItem): Step {
+  const isChain = item.group.endsWith("chains");
+  return isChain
+    ? putAway(state, { type: "take-preset", name: item.value })
+    : step(state, { type: "take-preset", name: item.value });
+}
+
+export function askToKeepStage(state: EditorState): Step {
+  const row = rowInHand(state);
+  if (row.type !== "stage") return told(state, "take a stage in hand first", true);
+  return ask(state, { type: "keep-stage" }, "keep this stage as preset", nameOf(row.stage));
+}
+
+export const askToKeepChain = (state: EditorState): Step =>
+  ask(
+    state,
+    { type: "keep-chain" },
+    "keep the chain as preset",
+    chainFileName(state.resolved.title).replace(".chain.json", ""),
+  );
+
+const NAME_NEEDED = "a name for the preset is needed";
+
+export function keepStageAs(state: EditorState, name: string): Step | string {
+  const row = rowInHand(state);
+  if (name === "") return NAME_NEEDED;
+  return row.type === "stage" ? step(state, { type: "keep-stage", name, stage: row.stage }) : step(state);
+}
+
+export function keepChainAs(state: EditorState, name: string): Step | string {
+  if (name === "") return NAME_NEEDED;
+  return step(state, { type: "keep-chain", name, document: state.document, original: state.file });
+}
+
+export function askToRenamePreset(state: EditorState, item: ListItem): Step {
+  if (!item.group.startsWith("your own")) return told(state, "a shipped preset keeps its name", true);
+  return ask(
+    state,
+    { type: "rename-preset", name: item.value },
+    `rename preset ${item.value} to`,
+    item.value,
+  );
+}
+
+export function renamePresetTo(state: EditorState, name: string, newName: string): Step | string {
+  return newName === "" ? NAME_NEEDED : step(state, { type: "rename-preset", name, newName });
+}
+
+export function askToRemovePreset(state: EditorState, item: ListItem): Step {
+  if (!item.group.startsWith("your own")) return told(state, "a shipped preset cannot be removed", true);
+  const question: QuestionDialog = {
+    type: "question",
+    text: `Remove the preset "${item.value}"?`,
+    answers: [
+      { key: "r", words: "remove it", action: { type: "remove-preset", name: item.value } },
+      { key: "c", words: "keep it", action: { type: "nothing" } },
+    ],
+  };
+  return step({ ...state, dialog: question });
+}

@@ -1,0 +1,100 @@
+import type { DocumentContext } from "../document/context.ts";
+import type { ResolvedChain } from "../document/resolve.ts";
+import type { ChainDocument, StageDocument } from "../document/types.ts";
+import type { AfterSave } from "./dialog.ts";
+import type { KeyPress } from "./key-press.ts";
+import type { EditorState, FileOrigin, Size } from "./state.ts";
+
+/** What happened: a key, or the outcome of something that was asked for. */
+export type Message =
+  | { readonly type: "key"; readonly key: KeyPress }
+  | { readonly type: "resized"; readonly size: Size }
+  | { readonly type: "context-changed"; readonly context: DocumentContext }
+  | { readonly type: "chain-opened"; readonly chain: OpenedChain }
+  | { readonly type: "stage-taken"; readonly stage: StageDocument; readonly context: DocumentContext }
+  | { readonly type: "saved"; readonly file: FileOrigin; readonly after: AfterSave | undefined }
+  | {
+      /** The file on disk is not the one that was read. */
+      readonly type: "save-held";
+      readonly path: string;
+      readonly words: string;
+      readonly after: AfterSave | undefined;
+    }
+  | { readonly type: "presets-listed"; readonly presets: readonly PresetLine[] }
+  | { readonly type: "preset-seen"; readonly name: string; readonly look: PresetLook }
+  | { readonly type: "left-behind"; readonly work: LeftWork }
+  | { readonly type: "told"; readonly text: string; readonly bad: boolean };
+
+export interface OpenedChain {
+  readonly document: ChainDocument;
+  readonly resolved: ResolvedChain;
+  readonly context: DocumentContext;
+  /** Absent for a preset: it is saved under a new name. */
+  readonly file: FileOrigin | undefined;
+  /** The document that is on the disk, where it is another one: work that was taken up again. */
+  readonly saved?: ChainDocument | undefined;
+  readonly isRecovered?: boolean;
+  readonly shownName: string;
+}
+
+export interface PresetLine {
+  readonly name: string;
+  readonly origin: "own" | "shipped";
+  readonly type: "chain" | "stage";
+  readonly title: string;
+}
+
+/** A preset looked at before it is taken: its chain, or its stage alone behind an ideal source. */
+export type PresetLook =
+  | { readonly ok: true; readonly resolved: ResolvedChain }
+  | { readonly ok: false; readonly words: string };
+
+/** Work that an ended program left unsaved. */
+export interface LeftWork {
+  readonly id: string;
+  readonly title: string;
+  /** In words, as in `today at 14:05`. */
+  readonly when: string;
+}
+
+/** What the editor wants done outside of it; the outcome comes back as a message. */
+export type Command =
+  | { readonly type: "load-formula"; readonly again: Message }
+  | { readonly type: "open"; readonly name: string }
+  | SaveCommand
+  | { readonly type: "list-presets" }
+  | { readonly type: "look-at-preset"; readonly name: string }
+  | { readonly type: "take-preset"; readonly name: string }
+  | {
+      readonly type: "keep-chain";
+      readonly name: string;
+      readonly document: ChainDocument;
+      readonly original: FileOrigin | undefined;
+    }
+  | { readonly type: "keep-stage"; readonly name: string; readonly stage: StageDocument }
+  | { readonly type: "rename-preset"; readonly name: string; readonly newName: string }
+  | { readonly type: "remove-preset"; readonly name: string }
+  | { readonly type: "recover"; readonly id: string }
+  | { readonly type: "discard"; readonly id: string }
+  | { readonly type: "quit" };
+
+export interface SaveCommand {
+  readonly type: "save";
+  readonly path: string;
+  readonly document: ChainDocument;
+  /** The file that it was read from, for writing it back as it was written. */
+  readonly original: FileOrigin | undefined;
+  readonly overwrite: boolean;
+  readonly after: AfterSave | undefined;
+}
+
+/** The state after a message, and what is to be done. */
+export interface Step {
+  readonly state: EditorState;
+  readonly commands: readonly Command[];
+}
+
+export const step = (state: EditorState, ...commands: readonly Command[]): Step => ({ state, commands });
+
+export const told = (state: EditorState, text: string, bad = false): Step =>
+  step({ ...state, notice: { text, bad } });
