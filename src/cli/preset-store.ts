@@ -25,7 +25,8 @@ export interface PresetStore {
   readonly list: () => Answer<readonly ListedPreset[]>;
   /** Undefined without a preset of that name. */
   readonly find: (name: string) => Answer<FoundPreset | undefined>;
-  readonly save: (name: string, chainText: string) => Answer<void>;
+  /** Files named in the chain are relative to `folder`, which is absolute. Replaces an own preset of that name. */
+  readonly save: (name: string, chainText: string, folder: string) => Answer<void>;
   readonly remove: (name: string) => Answer<void>;
   /** What was found amiss on the way, such as a damaged settings file that was set aside. */
   readonly notes: () => readonly string[];

@@ -1,4 +1,7 @@
+import { appFolders } from "../effects/paths.ts";
+import { openPresets } from "../effects/presets.ts";
 import type { CliIo, CliOutput } from "./io.ts";
+import { presetStore } from "./preset-adapter.ts";
 
 /** The process's own streams, environment and presets. */
 export function systemIo(): CliIo {
@@ -7,6 +10,7 @@ export function systemIo(): CliIo {
     stdin: process.stdin,
     stdout: output(process.stdout),
     stderr: output(process.stderr),
+    presets: presetStore(openPresets(appFolders())),
   };
 }
 

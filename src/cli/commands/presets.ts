@@ -42,7 +42,8 @@ export async function savePreset(
 ): Promise<Outcome> {
   const chain = await openChain(chainArgument, session);
   if (!chain.ok) return chain;
-  return changed(await store.save(name, chain.value.text), `the preset ${quoted(name)} is saved`);
+  const { text, context } = chain.value;
+  return changed(await store.save(name, text, context.folder), `the preset ${quoted(name)} is saved`);
 }
 
 /** `halfpower presets remove NAME` */
