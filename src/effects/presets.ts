@@ -29,10 +29,12 @@ export interface Preset extends PresetEntry {
  * at the disk anew, since other copies of the program may be running.
  */
 export interface Presets extends PresetChanges {
-  /** Shipped ones first, each sort in the order of names. */
+  /**
+   * Shipped ones first, each sort in the order of names. No name stands there twice: where a later program brings one
+   * along that the user has already, the user's own hides it until it is renamed.
+   */
   readonly list: () => Promise<readonly PresetEntry[]>;
-  /** The user's own comes first where a later program brought one of the same name along, unless `origin` is told. */
-  readonly find: (name: string, origin?: PresetOrigin) => Promise<Result<Preset | undefined, FileProblem>>;
+  readonly find: (name: string) => Promise<Result<Preset | undefined, FileProblem>>;
   /** What was found amiss so far, such as a damaged settings file that was set aside; each once, safe to show. */
   readonly notes: () => readonly string[];
 }
@@ -44,15 +46,16 @@ export function openPresets(folders: Pick<AppFolders, "config" | "shipped">): Pr
   const shipped = () => shippedOf(folders.shipped, notes);
   return {
     ...presetChanges(settings, (name) => shipped().has(name)),
-    list: async () => [
-      ...[...shipped().values()].map(shippedEntry),
-      ...[...(await own()).values()].sort(byName).map(ownEntry),
-    ],
-    find: async (given, origin) => {
+    list: async () => {
+      const mine = await own();
+      const theirs = [...shipped().values()].filter(({ name }) => !mine.has(name));
+      return [...theirs.map(shippedEntry), ...[...mine.values()].sort(byName).map(ownEntry)];
+    },
+    find: async (given) => {
       const name = tidyName(given);
-      const mine = origin === "shipped" ? undefined : (await own()).get(name);
+      const mine = (await own()).get(name);
       if (mine !== undefined) return ok({ ...ownEntry(mine), text: mine.text, folder: mine.folder });
-      const theirs = origin === "own" ? undefined : shipped().get(name);
+      const theirs = shipped().get(name);
       if (theirs === undefined) return ok(undefined);
       const text = shippedText(theirs);
       return text.ok ? ok({ ...shippedEntry(theirs), text: text.value, folder: folders.shipped }) : text;
