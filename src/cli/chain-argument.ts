@@ -1,9 +1,10 @@
-import { existsSync } from "node:fs";
 import type { Result } from "../core/result.ts";
 import { plainText } from "../core/text.ts";
 import { MAX_CHAIN_BYTES, openChainFile } from "../effects/chain-files.ts";
 import { type ContextChain, chainFromText } from "../effects/chain-text.ts";
+import { isFileName } from "../effects/file-name.ts";
 import { type FileProblem, refuseFile } from "../effects/file-problem.ts";
+import type { FileStamp } from "../effects/stamp.ts";
 import { readStandardInput } from "../effects/standard-input.ts";
 import type { Session } from "./io.ts";
 import type { PresetStore } from "./preset-store.ts";
@@ -13,6 +14,9 @@ import { presetNamed } from "./unknown-preset.ts";
 export interface NamedChain extends ContextChain {
   /** For messages, safe to show: the file as it was typed, `standard input`, or the preset. */
   readonly shownName: string;
+  /** Of a chain that came from a file. */
+  readonly path?: string;
+  readonly stamp?: FileStamp;
 }
 
 const MOST_NAME = 300;
@@ -25,7 +29,7 @@ type Named = Result<NamedChain, FileProblem>;
  */
 export async function openChain(argument: string, { io }: Session): Promise<Named> {
   if (argument === "-") return fromInput(io);
-  if (io.presets === undefined || isFile(argument)) return named(await openChainFile(argument), argument);
+  if (io.presets === undefined || isFileName(argument)) return named(await openChainFile(argument), argument);
   return fromPreset(argument, io.presets);
 }
 
@@ -56,6 +60,3 @@ async function fromPreset(name: string, store: PresetStore): Promise<Named> {
 
 const named = (chain: Result<ContextChain, FileProblem>, shownName: string): Named =>
   chain.ok ? { ok: true, value: { ...chain.value, shownName: plainText(shownName, MOST_NAME) } } : chain;
-
-const isFile = (argument: string): boolean =>
-  argument.includes("/") || argument.endsWith(".json") || existsSync(argument);

@@ -5,7 +5,8 @@ import type { Charset } from "../core/units/format.ts";
 import { codeOf, fileProblemText, systemProblem } from "../effects/file-problem.ts";
 import { decideDisplay, type ScreenDisplay } from "../effects/terminal/display.ts";
 import { toAscii } from "./ascii.ts";
-import { sheet } from "./commands/sheet.ts";
+import { type NamedChain, openChain } from "./chain-argument.ts";
+import { DEMO_CHAIN, sheet } from "./commands/sheet.ts";
 import type { CliIo, Session } from "./io.ts";
 import { DONE, type Outcome, REFUSED } from "./outcome.ts";
 import { program, type Run } from "./program.ts";
@@ -13,7 +14,7 @@ import { usageProblem } from "./usage.ts";
 
 /** What opens the full screen, and what it resolves to when it is left. */
 export type OpenWorkstation = (options: {
-  readonly chain?: string;
+  readonly chain: NamedChain;
   readonly display: ScreenDisplay;
 }) => Promise<number>;
 
@@ -28,10 +29,14 @@ export async function runCli(
 ): Promise<number> {
   const display = decideDisplay(io.env, io.stdin, io.stdout, { ascii: wantsAscii(argv) });
   const session: Session = { io, charset: display.unicode ? "unicode" : "ascii" };
-  const open = async (chain: string | undefined): Promise<Outcome> => {
-    if (display.mode === "sheet" || openWorkstation === undefined) return sheet(session, chain);
-    const exitCode = await openWorkstation({ ...(chain === undefined ? {} : { chain }), display });
-    return ok({ text: "", exitCode });
+  const open = async (argument: string = DEMO_CHAIN): Promise<Outcome> => {
+    // Keys come from standard input, so that a chain cannot come from there too.
+    if (display.mode === "sheet" || openWorkstation === undefined || argument === "-") {
+      return sheet(session, argument);
+    }
+    const chain = await openChain(argument, session);
+    if (!chain.ok) return chain;
+    return ok({ text: "", exitCode: await openWorkstation({ chain: chain.value, display }) });
   };
   try {
     return await deliver(await outcomeOf(argv, session, open), session);

@@ -1,5 +1,6 @@
 import type { ResolvedChain } from "../document/resolve.ts";
 import type { ChainDocument } from "../document/types.ts";
+import type { KeepCommand } from "./message.ts";
 import type { Field } from "./rows.ts";
 import type { TextField } from "./text-field.ts";
 
@@ -91,7 +92,8 @@ export type AnswerAction =
   | { readonly type: "another-name"; readonly after: AfterSave | undefined }
   | { readonly type: "recover"; readonly id: string }
   | { readonly type: "discard"; readonly id: string }
-  | { readonly type: "remove-preset"; readonly name: string };
+  | { readonly type: "remove-preset"; readonly name: string }
+  | { readonly type: "replace-preset"; readonly command: KeepCommand };
 
 /** What was asked for when unsaved work stood in the way. */
 export type AfterSave =

@@ -8,3 +8,6 @@ export function chainFileName(title: string): string {
     .slice(0, 60);
   return `${stem || "chain"}.chain.json`;
 }
+
+/** A name without any ending gets that of chain files. */
+export const withEnding = (path: string): string => (/\.[^./]*$/.test(path) ? path : `${path}.chain.json`);

@@ -1,17 +1,16 @@
-import type { DocumentContext } from "../document/context.ts";
 import type { ResolvedChain } from "../document/resolve.ts";
 import type { ChainDocument, StageDocument } from "../document/types.ts";
 import type { AfterSave } from "./dialog.ts";
 import type { KeyPress } from "./key-press.ts";
-import type { EditorState, FileOrigin, Size } from "./state.ts";
+import type { EditorContext, EditorState, FileOrigin, Size } from "./state.ts";
 
 /** What happened: a key, or the outcome of something that was asked for. */
 export type Message =
   | { readonly type: "key"; readonly key: KeyPress }
   | { readonly type: "resized"; readonly size: Size }
-  | { readonly type: "context-changed"; readonly context: DocumentContext }
+  | { readonly type: "context-changed"; readonly context: EditorContext }
   | { readonly type: "chain-opened"; readonly chain: OpenedChain }
-  | { readonly type: "stage-taken"; readonly stage: StageDocument; readonly context: DocumentContext }
+  | { readonly type: "stage-taken"; readonly stage: StageDocument; readonly context: EditorContext }
   | { readonly type: "saved"; readonly file: FileOrigin; readonly after: AfterSave | undefined }
   | {
       /** The file on disk is not the one that was read. */
@@ -23,12 +22,13 @@ export type Message =
   | { readonly type: "presets-listed"; readonly presets: readonly PresetLine[] }
   | { readonly type: "preset-seen"; readonly name: string; readonly look: PresetLook }
   | { readonly type: "left-behind"; readonly work: LeftWork }
+  | { readonly type: "preset-held"; readonly name: string; readonly command: KeepCommand }
   | { readonly type: "told"; readonly text: string; readonly bad: boolean };
 
 export interface OpenedChain {
   readonly document: ChainDocument;
   readonly resolved: ResolvedChain;
-  readonly context: DocumentContext;
+  readonly context: EditorContext;
   /** Absent for a preset: it is saved under a new name. */
   readonly file: FileOrigin | undefined;
   /** The document that is on the disk, where it is another one: work that was taken up again. */
@@ -46,7 +46,18 @@ export interface PresetLine {
 
 /** A preset looked at before it is taken: its chain, or its stage alone behind an ideal source. */
 export type PresetLook =
-  | { readonly ok: true; readonly resolved: ResolvedChain }
+  | {
+      readonly ok: true;
+      readonly type: "chain";
+      readonly document: ChainDocument;
+      readonly context: EditorContext;
+    }
+  | {
+      readonly ok: true;
+      readonly type: "stage";
+      readonly stage: StageDocument;
+      readonly context: EditorContext;
+    }
   | { readonly ok: false; readonly words: string };
 
 /** Work that an ended program left unsaved. */
@@ -65,18 +76,22 @@ export type Command =
   | { readonly type: "list-presets" }
   | { readonly type: "look-at-preset"; readonly name: string }
   | { readonly type: "take-preset"; readonly name: string }
-  | {
-      readonly type: "keep-chain";
-      readonly name: string;
-      readonly document: ChainDocument;
-      readonly original: FileOrigin | undefined;
-    }
-  | { readonly type: "keep-stage"; readonly name: string; readonly stage: StageDocument }
+  | KeepCommand
   | { readonly type: "rename-preset"; readonly name: string; readonly newName: string }
   | { readonly type: "remove-preset"; readonly name: string }
   | { readonly type: "recover"; readonly id: string }
   | { readonly type: "discard"; readonly id: string }
   | { readonly type: "quit" };
+
+/** Keeps a preset under a name; one of that name is replaced only on request. */
+export type KeepCommand = { readonly name: string; readonly replace?: boolean } & (
+  | {
+      readonly type: "keep-chain";
+      readonly document: ChainDocument;
+      readonly original: FileOrigin | undefined;
+    }
+  | { readonly type: "keep-stage"; readonly stage: StageDocument }
+);
 
 export interface SaveCommand {
   readonly type: "save";

@@ -11,7 +11,7 @@ export interface EditorState {
   readonly document: ChainDocument;
   readonly resolved: ResolvedChain;
   /** What the document is resolved with: measured files and the reader of formulas. */
-  readonly context: DocumentContext;
+  readonly context: EditorContext;
   readonly history: History;
   /** The document as it was last read or written; undefined for one that no file and no preset holds. */
   readonly saved: ChainDocument | undefined;
@@ -32,6 +32,9 @@ export interface EditorState {
   readonly notice: Notice | undefined;
   readonly size: Size;
 }
+
+/** A context of documents that knows the folder which file names are relative to. */
+export type EditorContext = DocumentContext & { readonly folder: string };
 
 /** Where the chain came from: a file that it is saved to, with its text as read. */
 export interface FileOrigin {
@@ -77,7 +80,7 @@ export interface Notice {
 export interface StartOptions {
   readonly document: ChainDocument;
   readonly resolved: ResolvedChain;
-  readonly context: DocumentContext;
+  readonly context: EditorContext;
   readonly file: FileOrigin | undefined;
   readonly size: Size;
 }

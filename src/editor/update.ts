@@ -1,3 +1,5 @@
+import { problemText } from "../document/problem.ts";
+import { resolveChain } from "../document/resolve.ts";
 import { editField, fieldKey, leave } from "./actions/field.ts";
 import { saveWasHeld, wasSaved } from "./actions/files.ts";
 import { helpKey } from "./actions/help.ts";
@@ -6,11 +8,12 @@ import { showPresets } from "./actions/presets.ts";
 import { promptKey } from "./actions/prompt.ts";
 import { questionKey } from "./actions/question.ts";
 import { fieldInHand } from "./actions/rows.ts";
-import { insertStage, nameOf } from "./actions/stages.ts";
-import type { QuestionDialog } from "./dialog.ts";
+import { chainOfOne, insertStage, nameOf } from "./actions/stages.ts";
+import { itemInHand, type Look, type QuestionDialog } from "./dialog.ts";
 import { type KeyPress, keyWord } from "./key-press.ts";
 import { bindingOf } from "./keymap.ts";
 import {
+  type KeepCommand,
   type LeftWork,
   type Message,
   type OpenedChain,
@@ -51,6 +54,8 @@ export function update(state: EditorState, message: Message): Step {
       return seen(state, message.name, message.look);
     case "left-behind":
       return askAboutLeftWork(state, message.work);
+    case "preset-held":
+      return askToReplace(state, message.name, message.command);
     case "told":
       return told(state, message.text, message.bad);
   }
@@ -106,13 +111,32 @@ function opened(
   );
 }
 
+/** A preset that was asked for is looked at, unless the list has gone on since. */
 function seen(state: EditorState, name: string, look: PresetLook): Step {
   const { dialog } = state;
-  if (dialog?.type !== "list" || dialog.purpose !== "presets") return step(state);
-  const seenLook = look.ok
-    ? { value: name, resolved: look.resolved, problem: undefined }
-    : { value: name, resolved: undefined, problem: look.words };
-  return step({ ...state, dialog: { ...dialog, look: seenLook } });
+  if (dialog?.type !== "list" || itemInHand(dialog)?.value !== name) return step(state);
+  return step({ ...state, dialog: { ...dialog, look: { value: name, ...looked(state, look) } } });
+}
+
+function looked(state: EditorState, look: PresetLook): Omit<Look, "value"> {
+  if (!look.ok) return { resolved: undefined, problem: look.words };
+  const document = look.type === "chain" ? look.document : chainOfOne(look.stage, state.document.sweep);
+  const resolved = resolveChain(document, look.context);
+  return resolved.ok
+    ? { resolved: resolved.value, problem: undefined }
+    : { resolved: undefined, problem: problemText(resolved.problem) };
+}
+
+function askToReplace(state: EditorState, name: string, command: KeepCommand): Step {
+  const question: QuestionDialog = {
+    type: "question",
+    text: `There is a preset "${name}" already.`,
+    answers: [
+      { key: "r", words: "replace it", action: { type: "replace-preset", command } },
+      { key: "c", words: "keep it as it is", action: { type: "nothing" } },
+    ],
+  };
+  return step({ ...state, dialog: question });
 }
 
 function askAboutLeftWork(state: EditorState, { id, title, when }: LeftWork): Step {

@@ -42,7 +42,7 @@ describe("the command line", () => {
         stderr: output,
       };
       return runCli([fileOf(lowpass())], io, async ({ chain, display }) => {
-        opened.push([chain?.endsWith("pump.chain.json"), display.mode]);
+        opened.push([chain.path?.endsWith("pump.chain.json"), display.mode]);
         return 7;
       });
     };

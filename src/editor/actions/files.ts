@@ -1,5 +1,5 @@
 import type { AfterSave, QuestionDialog } from "../dialog.ts";
-import { chainFileName } from "../file-name.ts";
+import { chainFileName, withEnding } from "../file-name.ts";
 import { type Command, type Step, step, told } from "../message.ts";
 import { type EditorState, type FileOrigin, isUnsaved } from "../state.ts";
 import { ask } from "./ask.ts";
@@ -21,7 +21,7 @@ export const askForName = (state: EditorState, after?: AfterSave): Step =>
   ask(state, { type: "save-as", after }, "save as", state.file?.path ?? chainFileName(state.resolved.title));
 
 export const saveUnder = (state: EditorState, path: string, after: AfterSave | undefined): Step =>
-  step(state, saveCommand(state, path, false, after));
+  step(state, saveCommand(state, withEnding(path), false, after));
 
 export const overwrite = (state: EditorState, path: string, after: AfterSave | undefined): Step =>
   step(state, saveCommand(state, path, true, after));

@@ -1,6 +1,5 @@
 import { STAGE_KINDS, stageKind } from "../../core/stages/index.ts";
-import type { ChainDocument } from "../../document/types.ts";
-import { FORMAT, type LimitQuantity, VERSION } from "../../document/types.ts";
+import type { LimitQuantity } from "../../document/types.ts";
 import { lacksFormulas, resolvedIn } from "../apply.ts";
 import { fittingItems, itemInHand, type ListDialog, type ListItem } from "../dialog.ts";
 import { type Message, type Step, step, told } from "../message.ts";
@@ -10,7 +9,7 @@ import { typeInto } from "../text-field.ts";
 import { ask } from "./ask.ts";
 import { cursorAt } from "./cursor.ts";
 import { askToRemovePreset, askToRenamePreset, takePreset } from "./presets.ts";
-import { addKind, addLimit, initialStage } from "./stages.ts";
+import { addKind, addLimit, chainOfOne, initialStage } from "./stages.ts";
 
 const listOf = (
   purpose: ListDialog["purpose"],
@@ -139,13 +138,7 @@ function withLook(state: EditorState, list: ListDialog): Step {
 function lookAtKind(state: EditorState, list: ListDialog, value: string): Step {
   const kind = stageKind(value);
   if (kind === undefined) return step(state);
-  const document: ChainDocument = {
-    format: FORMAT,
-    version: VERSION,
-    title: `${value} alone`,
-    stages: [initialStage(kind)],
-    ...(state.document.sweep === undefined ? {} : { sweep: state.document.sweep }),
-  };
+  const document = chainOfOne(initialStage(kind), state.document.sweep);
   // Without the reader of formulas there is nothing to look at yet, and nothing is wrong.
   if (lacksFormulas(state, document)) return step(state);
   const resolved = resolvedIn(state, document);

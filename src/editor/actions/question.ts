@@ -33,5 +33,7 @@ function carryOut(state: EditorState, action: AnswerAction): Step {
       return step(state, { type: "discard", id: action.id });
     case "remove-preset":
       return step(state, { type: "remove-preset", name: action.name });
+    case "replace-preset":
+      return step(state, action.command);
   }
 }

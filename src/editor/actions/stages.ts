@@ -1,7 +1,14 @@
 import { stageKind } from "../../core/stages/index.ts";
 import type { StageKind } from "../../core/stages/kind.ts";
 import { MAX_STAGES } from "../../document/stages.ts";
-import type { ChainDocument, LimitDocument, LimitQuantity, StageDocument } from "../../document/types.ts";
+import {
+  type ChainDocument,
+  FORMAT,
+  type LimitDocument,
+  type LimitQuantity,
+  type StageDocument,
+  VERSION,
+} from "../../document/types.ts";
 import { changed } from "../apply.ts";
 import { setAt } from "../document-edit.ts";
 import { type Message, type Step, step, told } from "../message.ts";
@@ -14,6 +21,15 @@ export function initialStage(kind: StageKind): StageDocument {
   const given = kind.parts.flatMap(({ name, initial }) => (initial ? [[name, initial] as const] : []));
   return given.length === 0 ? { kind: kind.kind } : { kind: kind.kind, parts: Object.fromEntries(given) };
 }
+
+/** A stage alone, behind an ideal source and into an open output. */
+export const chainOfOne = (stage: StageDocument, sweep: ChainDocument["sweep"]): ChainDocument => ({
+  format: FORMAT,
+  version: VERSION,
+  title: `${nameOf(stage)} alone`,
+  stages: [stage],
+  ...(sweep === undefined ? {} : { sweep }),
+});
 
 /** What a person calls a stage: its name, else its kind. */
 export const nameOf = ({ name, kind }: StageDocument): string => name || kind;
