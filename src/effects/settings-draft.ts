@@ -46,9 +46,20 @@ export async function exchangeSettings(
   }
 }
 
-/** `conf` brings a validator along that takes long to load, so it is loaded when something is written. */
+let conf: Promise<typeof import("conf")> | undefined;
+
+/** With a validator that takes long to load, so that it is loaded when something is written, and before the lock is taken. */
+export function loadConf(): Promise<typeof import("conf")> {
+  if (conf !== undefined) return conf;
+  // With it comes a listener (when-exit) that would pass this signal on to end the program, where a file meets the
+  // limit of `ulimit -f`; writing fails with EFBIG then, which is enough.
+  process.on("SIGXFSZ", () => {});
+  conf = import("conf");
+  return conf;
+}
+
 async function draftOf(folder: string, data: SettingsData): Promise<string> {
-  const { default: Conf } = await import("conf");
+  const { default: Conf } = await loadConf();
   // Left by a copy that was killed; `conf` would begin by reading it.
   rmSync(join(folder, `${DRAFT}.json`), { force: true });
   const draft = new Conf<Record<string, unknown>>({

@@ -4,7 +4,7 @@ import { plainText } from "../core/text.ts";
 import { type FileProblem, fileProblem, fileProblemText, systemProblem } from "./file-problem.ts";
 import { setAside } from "./set-aside.ts";
 import { readSettingsData, type SettingsContent, type SettingsData } from "./settings-data.ts";
-import { exchangeSettings } from "./settings-draft.ts";
+import { exchangeSettings, loadConf } from "./settings-draft.ts";
 import { whileLocked } from "./settings-lock.ts";
 
 /** The settings file. Other copies of the program write it too, so that it is read anew each time. */
@@ -46,8 +46,9 @@ export function openSettings(folder: string): Settings {
     return {};
   };
 
-  const change: Settings["change"] = (make) =>
-    whileLocked(path, async () => {
+  const change: Settings["change"] = async (make) => {
+    await loadConf();
+    return whileLocked(path, async () => {
       for (let tries = 0; tries < MOST_TRIES; tries++) {
         const before = soundContent(path, note);
         if (!before.ok) return before;
@@ -60,6 +61,7 @@ export function openSettings(folder: string): Settings {
       }
       return fail(fileProblem(path, "something else keeps changing it", "a try later on"));
     });
+  };
 
   return { path, read, change, notes: () => [...notes] };
 }
