@@ -161,6 +161,23 @@ describe("saveChainFile", () => {
     expect(readdirSync(folder)).toEqual(["circle.json"]);
   });
 
+  it("does not write a file that is marked as read-only, nor where the folder is closed", async () => {
+    chmodSync(folder, 0o777);
+    writeFileSync(file, BEFORE);
+    const write = () => copies.run(["write", file, BEFORE, "10"], { asNobody: true });
+    const denied = { type: "failed", problem: { found: "access to it is denied" } };
+    chmodSync(file, 0o444);
+    expect(await write()).toMatchObject(denied);
+    chmodSync(file, 0o666);
+    chmodSync(folder, 0o555);
+    expect(await write()).toMatchObject(denied);
+    expect(readFileSync(file, "utf8")).toBe(BEFORE);
+    chmodSync(folder, 0o777);
+    expect(await write()).toMatchObject({ type: "saved" });
+    expect(statSync(file).mode & 0o777).toBe(0o666);
+    expect(readdirSync(folder)).toEqual(["pump2.chain.json"]);
+  });
+
   it("leaves the old file whole and nothing else where the disk takes only a part", async () => {
     writeFileSync(file, BEFORE);
     const outcome = await copies.run(["write", file, BEFORE, "100000"], { fileLimitKb: 16 });

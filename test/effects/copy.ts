@@ -4,10 +4,17 @@ import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { build } from "esbuild";
 
+export interface CopyOptions {
+  /** The system lets no file grow beyond. */
+  readonly fileLimitKb?: number;
+  /** Without the rights of the superuser, where the tests have them. */
+  readonly asNobody?: boolean;
+}
+
 /** The bundled `fixture/copy.ts`, to be run by processes of their own. */
 export interface Copies {
-  /** Runs to its end; limited to files of so many kB where told. Resolves to its answer. */
-  run(args: readonly string[], options?: { readonly fileLimitKb?: number }): Promise<unknown>;
+  /** Runs to its end and resolves to its answer. */
+  run(args: readonly string[], options?: CopyOptions): Promise<unknown>;
   /** Resolves to its first answer while it runs on. */
   start(args: readonly string[]): Promise<{ readonly child: ChildProcess; readonly answer: unknown }>;
   remove(): void;
@@ -33,30 +40,34 @@ export async function bundledCopies(): Promise<Copies> {
     banner: { js: REQUIRE },
   });
   return {
-    run: (args, { fileLimitKb } = {}) =>
-      // Without the trap the system would end the process at the limit instead of refusing to write.
-      fileLimitKb === undefined
-        ? output(process.execPath, [file, ...args])
-        : output("/bin/bash", [
-            "-c",
-            `trap '' XFSZ; ulimit -f ${fileLimitKb}; exec "$@"`,
-            "bash",
-            process.execPath,
-            file,
-            ...args,
-          ]),
+    run: (args, options) => output([process.execPath, file, ...args], options),
     start: (args) => started(file, args),
     remove: () => rmSync(folder, { recursive: true, force: true }),
   };
 }
 
-const output = (command: string, args: readonly string[]): Promise<unknown> =>
-  new Promise((resolve, reject) => {
-    execFile(command, args, (error, stdout, stderr) => {
+/** Without the trap the system would end the process at the limit instead of refusing to write. */
+const limitedTo = (kb: number): readonly string[] => [
+  "/bin/bash",
+  "-c",
+  `trap '' XFSZ; ulimit -f ${kb}; exec "$@"`,
+  "bash",
+];
+
+/** Numbers of user and group "nobody" on Linux. */
+const NOBODY = { uid: 65534, gid: 65534 };
+
+function output(program: readonly string[], { fileLimitKb, asNobody }: CopyOptions = {}): Promise<unknown> {
+  const limit = fileLimitKb === undefined ? [] : limitedTo(fileLimitKb);
+  const [command, ...args] = [...limit, ...program] as [string, ...string[]];
+  const user = asNobody && process.getuid?.() === 0 ? NOBODY : {};
+  return new Promise((resolve, reject) => {
+    execFile(command, args, user, (error, stdout, stderr) => {
       if (error === null) resolve(JSON.parse(stdout));
       else reject(new Error(`${error.message}\n${stderr}`));
     });
   });
+}
 
 function started(file: string, args: readonly string[]): ReturnType<Copies["start"]> {
   const child = spawn(process.execPath, [file, ...args], { stdio: ["ignore", "pipe", "inherit"] });

@@ -1,4 +1,4 @@
-import { mkdtempSync, readdirSync, readFileSync } from "node:fs";
+import { chmodSync, mkdtempSync, readdirSync, readFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from "vitest";
@@ -39,6 +39,26 @@ describe("copies of the program that run at once", () => {
     expect(await presets.save("after", chainOf("after"), folder)).toEqual({ ok: true, value: "added" });
     expect(await names()).toEqual(expect.arrayContaining(["after", "mine", "theirs-0"]));
     expect(presets.notes()).toEqual([]);
+  });
+});
+
+describe("settings that are closed", () => {
+  it("are not read, not set aside and not written, which is said at once", async () => {
+    await copies.run(["keep", folder, "mine", "1"]);
+    const file = join(folder, "settings.json");
+    const before = readFileSync(file);
+    const keep = () => copies.run(["keep", folder, "other", "1"], { asNobody: true });
+    const denied = [{ ok: false, problem: { found: "access to it is denied" } }];
+    chmodSync(folder, 0o755);
+    expect(await keep()).toMatchObject(denied);
+    chmodSync(folder, 0o777);
+    chmodSync(file, 0o000);
+    expect(await keep()).toMatchObject(denied);
+    chmodSync(file, 0o444);
+    expect(await keep()).toMatchObject(denied);
+    chmodSync(file, 0o600);
+    expect(readFileSync(file)).toEqual(before);
+    expect(readdirSync(folder)).toEqual(["settings.json"]);
   });
 });
 
