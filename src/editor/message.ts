@@ -8,6 +8,7 @@ import type { EditorContext, EditorState, FileOrigin, Size } from "./state.ts";
 export type Message =
   | { readonly type: "key"; readonly key: KeyPress }
   | { readonly type: "resized"; readonly size: Size }
+  | { readonly type: "kind-chosen"; readonly kind: string }
   | { readonly type: "context-changed"; readonly context: EditorContext }
   | { readonly type: "chain-opened"; readonly chain: OpenedChain }
   | { readonly type: "stage-taken"; readonly stage: StageDocument; readonly context: EditorContext }

@@ -8,7 +8,7 @@ import { showPresets } from "./actions/presets.ts";
 import { promptKey } from "./actions/prompt.ts";
 import { questionKey } from "./actions/question.ts";
 import { fieldInHand } from "./actions/rows.ts";
-import { chainOfOne, insertStage, nameOf } from "./actions/stages.ts";
+import { addKind, chainOfOne, insertStage, nameOf } from "./actions/stages.ts";
 import { itemInHand, type Look, type QuestionDialog } from "./dialog.ts";
 import { type KeyPress, keyWord } from "./key-press.ts";
 import { bindingOf } from "./keymap.ts";
@@ -33,6 +33,8 @@ export function update(state: EditorState, message: Message): Step {
       return onKey(state, message);
     case "resized":
       return step({ ...state, size: message.size });
+    case "kind-chosen":
+      return addKind(state, message.kind, message);
     case "context-changed":
       return step({ ...state, context: message.context });
     case "chain-opened":

@@ -1,11 +1,10 @@
 import { Box, Text } from "ink";
 import { useMemo, useSyncExternalStore } from "react";
-import { TraceMaker, type Traces } from "../chart/traces.ts";
-import type { Chain } from "../core/chain.ts";
+import { columnOfFrequency } from "../chart/scale.ts";
 import { readAt } from "../core/response/exact.ts";
 import type { Charset } from "../core/units/format.ts";
 import { type Layout, LEAST_SIZE, layoutOf } from "../editor/layout.ts";
-import { chainOnCharts, ghostOnCharts, windowOnCharts } from "../editor/selectors.ts";
+import { chainOnCharts, windowOnCharts } from "../editor/selectors.ts";
 import type { EditorState, Size } from "../editor/state.ts";
 import { chainPane } from "./chain-pane.ts";
 import { chartLines } from "./charts.ts";
@@ -17,6 +16,7 @@ import { questionPane } from "./question-pane.ts";
 import { readingPane } from "./reading-pane.ts";
 import { stateLine } from "./state-line.ts";
 import type { Store } from "./store.ts";
+import { type ShownTraces, useTraces } from "./use-traces.ts";
 
 interface AppProps {
   readonly store: Store;
@@ -52,7 +52,8 @@ function Body({ state, layout, charset }: BodyProps) {
   const reading = useMemo(() => readAt(chain, state.cursorHz), [chain, state.cursorHz]);
   const traces = useTraces(state, layout);
   const readingSize = { columns: size.columns, rows: layout.readingRows };
-  const below = <Text>{block(readingPane(state, reading, readingSize, charset))}</Text>;
+  const continuousDeg = phaseAtCursor(state, layout, traces);
+  const below = <Text>{block(readingPane(state, { reading, continuousDeg }, readingSize, charset))}</Text>;
   if (dialog?.type === "help") {
     const helpSize = { columns: size.columns, rows: layout.list.rows };
     return (
@@ -87,28 +88,8 @@ function sidePane(
   return chainPane(state, reading, list, charset);
 }
 
-export interface ShownTraces {
-  readonly chain: Traces;
-  readonly ghost: Traces | undefined;
+/** The continuous phase of the cursor's column; NaN off the charts. */
+function phaseAtCursor(state: EditorState, { plotColumns }: Layout, { chain }: ShownTraces): number {
+  const column = columnOfFrequency({ ...windowOnCharts(state), columns: plotColumns }, state.cursorHz);
+  return column === undefined || chain.phaseIsWrapped ? Number.NaN : chain.phaseDeg[column];
 }
-
-/** Traces are made anew only when a chain, the frequencies shown or the columns are other ones. */
-function useTraces(state: EditorState, { plotColumns }: Layout): ShownTraces {
-  const maker = useMemo(() => new TraceMaker(), []);
-  const ghostMaker = useMemo(() => new TraceMaker(), []);
-  const { chain } = chainOnCharts(state);
-  const ghost = ghostOnCharts(state)?.chain;
-  const { fromHz, toHz } = windowOnCharts(state);
-  const shown = useMemo(
-    () => maker.traces(chain, { fromHz, toHz, columns: plotColumns }),
-    [maker, chain, fromHz, toHz, plotColumns],
-  );
-  const behind = useMemo(
-    () => (ghost === undefined ? undefined : tracesOf(ghostMaker, ghost, fromHz, toHz, plotColumns)),
-    [ghostMaker, ghost, fromHz, toHz, plotColumns],
-  );
-  return { chain: shown, ghost: behind };
-}
-
-const tracesOf = (maker: TraceMaker, chain: Chain, fromHz: number, toHz: number, columns: number): Traces =>
-  maker.traces(chain, { fromHz, toHz, columns });

@@ -8,8 +8,8 @@ import type { Charset } from "../core/units/format.ts";
 import type { Layout } from "../editor/layout.ts";
 import { chainOnCharts, windowOnCharts } from "../editor/selectors.ts";
 import type { EditorState } from "../editor/state.ts";
-import type { ShownTraces } from "./app.tsx";
 import { type Line, lookOfRole } from "./paint.ts";
+import type { ShownTraces } from "./use-traces.ts";
 
 /** Gain, phase and the frequency axis, one above the other. */
 export function chartLines(
@@ -83,4 +83,4 @@ function limitsOf(state: EditorState): readonly LimitLine[] {
 }
 
 const greatest = (values: ArrayLike<number>): number =>
-  Array.from(values).reduce((most, value) => (value > most ? value : most), -Infinity);
+  Math.max(...Array.from(values).filter((value) => !Number.isNaN(value)));

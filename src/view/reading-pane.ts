@@ -1,5 +1,7 @@
+import type { Chain } from "../core/chain.ts";
 import { foldHz } from "../core/fold.ts";
 import { type Reading, readAt } from "../core/response/exact.ts";
+import { unwrappedAt } from "../core/response/phase.ts";
 import { wrapDeg } from "../core/units/decibel.ts";
 import type { Charset } from "../core/units/format.ts";
 import { chainOnCharts, ghostOnCharts } from "../editor/selectors.ts";
@@ -7,7 +9,6 @@ import type { EditorState, Size } from "../editor/state.ts";
 import { fittedLine, widthOf } from "./cells.ts";
 import { fixed, ratioText, scaled, signed } from "./numbers.ts";
 import { type Line, type Piece, piece } from "./paint.ts";
-import { signsOf } from "./signs.ts";
 
 interface Entry {
   readonly label: string;
@@ -18,15 +19,26 @@ interface Entry {
 
 const entry = (label: string, value: string, columns: number): Entry => ({ label, value, columns });
 
+/** What is read at the cursor. */
+export interface CursorReading {
+  readonly reading: Reading;
+  /** As the chart shows it, turns and all; NaN where that is not known. */
+  readonly continuousDeg: number;
+}
+
+/** From here on there is room for the continuous phase too. */
+const WIDE = 92;
+
 /** The exact response at the cursor, its differences to the pin, and to the response kept behind. */
 export function readingPane(
   state: EditorState,
-  reading: Reading,
+  { reading, continuousDeg }: CursorReading,
   size: Size,
   charset: Charset,
 ): readonly Line[] {
+  const phase = phaseText(reading, size.columns < WIDE ? Number.NaN : continuousDeg, charset);
   const lines = [
-    ...packed(entriesOf(state, reading, charset), size.columns),
+    ...packed(entriesOf(state, reading, phase, charset), size.columns),
     pinLine(state, reading, charset),
     ghostLine(state, reading, charset),
   ].filter((line) => line.length > 0);
@@ -34,15 +46,22 @@ export function readingPane(
   return lines.slice(0, size.rows).map((line) => fittedLine(line, size.columns, charset));
 }
 
-function entriesOf(state: EditorState, reading: Reading, charset: Charset): readonly Entry[] {
+/** The phase within half a turn, and behind it in brackets as the chart shows it, where that is another one. */
+function phaseText({ phaseDeg }: Reading, continuousDeg: number, charset: Charset): string {
+  const text = `${fixed(phaseDeg, 2, charset)}${degrees(charset)}`;
+  const turns = Math.round((continuousDeg - phaseDeg) / 360);
+  if (!Number.isFinite(turns) || turns === 0) return text;
+  return `${text} (${fixed(phaseDeg + 360 * turns, 2, charset)}${degrees(charset)})`;
+}
+
+function entriesOf(state: EditorState, reading: Reading, phase: string, charset: Charset): readonly Entry[] {
   const { converter } = chainOnCharts(state);
-  const deg = charset === "ascii" ? " deg" : "°";
   return [
     entry("at", scaled(reading.freqHz, "hertz", 5, charset), 15),
     entry("gain", `${fixed(reading.gainDb, 3, charset)} dB`, 17),
     entry("ratio", ratioText(reading.ratio, charset), 17),
     entry("attenuation", `${fixed(0 - reading.gainDb, 3, charset)} dB`, 24),
-    entry("phase", `${fixed(reading.phaseDeg, 2, charset)}${deg}`, 15),
+    entry("phase", phase, phase.includes("(") ? 27 : 15),
     entry("delay", scaled(reading.groupDelayS, "second", 4, charset), 17),
     entry("slope", `${fixed(reading.slopeDbPerDecade, 2, charset)} dB/dec`, 22),
     ...(converter === undefined
@@ -69,36 +88,41 @@ function packed(entries: readonly Entry[], columns: number): readonly Line[] {
   return lines;
 }
 
-function pinLine({ pinHz, ...state }: EditorState, reading: Reading, charset: Charset): Line {
+/** Differences from the pin to the cursor; the phase goes continuously from one to the other. */
+function pinLine(state: EditorState, reading: Reading, charset: Charset): Line {
+  const { pinHz } = state;
   if (pinHz === undefined) return [];
-  const { difference } = signsOf(charset);
-  const pinned = readAt(chainOnCharts(state as EditorState).chain, pinHz);
+  const { chain } = chainOnCharts(state);
+  const pinned = readAt(chain, pinHz);
   const decades = Math.log10(reading.freqHz / pinHz);
+  const delayS = reading.groupDelayS - pinned.groupDelayS;
+  const slope = reading.slopeDbPerDecade - pinned.slopeDbPerDecade;
   return [
     piece(` pin ${scaled(pinHz, "hertz", 5, charset)}`, "pin"),
-    piece(` ${fixed(pinned.gainDb, 3, charset)} dB  from it: `, "faint"),
-    ...differences(pinned, reading, charset),
+    piece("  from it", "faint"),
+    piece(` ${signed(reading.gainDb - pinned.gainDb, 3, charset)} dB`, "value"),
+    piece(`  ${signed(phaseBetween(chain, pinHz, reading.freqHz), 2, charset)}${degrees(charset)}`, "value"),
+    piece(`  ${delayS > 0 ? "+" : ""}${scaled(delayS, "second", 4, charset)}`, "value"),
     piece(`  ${signed(decades, 3, charset)} dec ${signed(decades / Math.log10(2), 2, charset)} oct`, "value"),
-    piece(` ${difference}slope`, "faint"),
-    piece(` ${signed(reading.slopeDbPerDecade - pinned.slopeDbPerDecade, 2, charset)}`, "value"),
+    piece(`  ${signed(slope, 2, charset)} dB/dec`, "value"),
   ];
 }
 
-function differences(from: Reading, to: Reading, charset: Charset): Line {
-  const deg = charset === "ascii" ? " deg" : "°";
-  const delay = to.groupDelayS - from.groupDelayS;
-  return [
-    piece(`${signed(to.gainDb - from.gainDb, 3, charset)} dB`, "value"),
-    piece(`  ${signed(to.phaseDeg - from.phaseDeg, 2, charset)}${deg}`, "value"),
-    piece(`  ${delay > 0 ? "+" : ""}${scaled(delay, "second", 4, charset)}`, "value"),
-  ];
+/** Continuous phase at the second frequency less that at the first, in degrees. */
+function phaseBetween(chain: Chain, fromHz: number, toHz: number): number {
+  if (fromHz === toHz) return 0;
+  const [lowHz, highHz] = [Math.min(fromHz, toHz), Math.max(fromHz, toHz)];
+  const [low, high] = unwrappedAt(chain, { fromHz: lowHz, toHz: highHz, perDecade: 1 }, [lowHz, highHz]);
+  return (high - low) * (toHz > fromHz ? 1 : -1);
 }
+
+const degrees = (charset: Charset): string => (charset === "ascii" ? " deg" : "°");
 
 function ghostLine(state: EditorState, reading: Reading, charset: Charset): Line {
   const ghost = ghostOnCharts(state);
   if (ghost === undefined || state.ghost === undefined) return [];
   const behind = readAt(ghost.chain, reading.freqHz);
-  const deg = charset === "ascii" ? " deg" : "°";
+  const deg = degrees(charset);
   const [name, words] = state.ghost.inFront ? ["now", "before is"] : ["before", "now is"];
   return [
     piece(` ${name} `, "ghost"),

@@ -1,7 +1,8 @@
 import type { Against } from "../core/chain.ts";
 import { plainText } from "../core/text.ts";
 import type { Charset } from "../core/units/format.ts";
-import { type EditorState, isUnsaved, shownChain } from "../editor/state.ts";
+import { chainOnCharts, lookOf } from "../editor/selectors.ts";
+import { type EditorState, isUnsaved } from "../editor/state.ts";
 import { spread } from "./cells.ts";
 import { type Line, piece } from "./paint.ts";
 import { signsOf } from "./signs.ts";
@@ -16,12 +17,23 @@ const AGAINST: Readonly<Record<Against, string>> = {
 export function stateLine(state: EditorState, columns: number, charset: Charset): Line {
   const { dot } = signsOf(charset);
   const unsaved = isUnsaved(state) ? [piece(` ${dot} `, "faint"), piece("unsaved", "strong")] : [];
-  const front = state.ghost?.inFront ? [piece(` ${dot} `, "faint"), piece("BEFORE", "strong")] : [];
   const title = plainText(state.resolved.title, 200) || "untitled chain";
   return spread(
-    [piece(title, "strong")],
-    [...front, ...unsaved, piece(`  ${AGAINST[shownChain(state).against]}`, "faint")],
+    [piece(title, "strong"), ...onCharts(state, dot)],
+    [...unsaved, piece(`  ${AGAINST[chainOnCharts(state).against]}`, "faint")],
     columns,
     charset,
   );
+}
+
+/** What the charts show where that is not the chain as it stands. */
+function onCharts(state: EditorState, dot: string): Line {
+  const look = lookOf(state)?.resolved;
+  const words =
+    look !== undefined
+      ? `charts show ${plainText(look.title, 200) || "an untitled chain"}`
+      : state.ghost?.inFront
+        ? "charts show the response BEFORE"
+        : undefined;
+  return words === undefined ? [] : [piece(` ${dot} `, "faint"), piece(words, "inHand")];
 }

@@ -91,7 +91,7 @@ export function listKey(state: EditorState, list: ListDialog, message: Message &
     case "end":
       return inHand(state, list, key.name === "home" ? 0 : Number.MAX_SAFE_INTEGER);
     case "enter":
-      return take(state, list, message);
+      return take(state, list);
     case "delete":
       return onPreset(state, list, askToRemovePreset);
     default:
@@ -149,13 +149,13 @@ function lookAtKind(state: EditorState, list: ListDialog, value: string): Step {
 }
 
 /** Enter on an item. */
-function take(state: EditorState, list: ListDialog, message: Message): Step {
+function take(state: EditorState, list: ListDialog): Step {
   const item = itemInHand(list);
   if (item === undefined) return step(state);
   const closed = { ...state, dialog: undefined };
   switch (list.purpose) {
     case "add":
-      return add(closed, item.value, message);
+      return add(closed, item.value);
     case "presets":
       return takePreset(closed, item);
     case "go-to":
@@ -172,9 +172,9 @@ function take(state: EditorState, list: ListDialog, message: Message): Step {
   }
 }
 
-function add(state: EditorState, value: string, message: Message): Step {
+function add(state: EditorState, value: string): Step {
   if (value.startsWith("limit ")) return addLimit(state, value.slice("limit ".length) as LimitQuantity);
   const needsFile = stageKind(value)?.parts.find(({ type }) => type === "file");
   if (needsFile !== undefined) return ask(state, { type: "file-of", kind: value }, needsFile.what);
-  return addKind(state, value, message);
+  return addKind(state, value, { type: "kind-chosen", kind: value });
 }

@@ -16,7 +16,7 @@ export function promptKey(
 ): Step {
   const { key } = message;
   if (key.name === "escape") return step({ ...state, dialog: undefined });
-  if (key.name === "enter") return answered(state, dialog, message);
+  if (key.name === "enter") return answered(state, dialog);
   const input = typeInto(dialog.input, key);
   return input === undefined
     ? step(state)
@@ -24,14 +24,14 @@ export function promptKey(
 }
 
 /** What the line was asked for, or the line again with what is wrong with it. */
-function answered(state: EditorState, dialog: PromptDialog, message: Message): Step {
+function answered(state: EditorState, dialog: PromptDialog): Step {
   const closed = { ...state, dialog: undefined };
-  const outcome = carryOut(closed, dialog.purpose, dialog.input.text.trim(), message);
+  const outcome = carryOut(closed, dialog.purpose, dialog.input.text.trim());
   if (typeof outcome !== "string") return outcome;
   return step({ ...state, dialog: { ...dialog, problem: outcome } });
 }
 
-function carryOut(state: EditorState, purpose: PromptPurpose, text: string, message: Message): Step | string {
+function carryOut(state: EditorState, purpose: PromptPurpose, text: string): Step | string {
   switch (purpose.type) {
     case "frequency":
       return toTypedFrequency(state, text);
@@ -44,7 +44,7 @@ function carryOut(state: EditorState, purpose: PromptPurpose, text: string, mess
     case "file-of":
       return text === ""
         ? "a file name is needed"
-        : insertStage(state, { kind: purpose.kind, parts: { file: text } }, `add ${purpose.kind}`, message);
+        : insertStage(state, { kind: purpose.kind, parts: { file: text } }, `add ${purpose.kind}`);
     case "open":
       return text === "" ? "a file or the name of a preset is needed" : openNamed(state, text);
     case "save-as":
