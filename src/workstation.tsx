@@ -1,7 +1,8 @@
 import { render } from "ink";
 import type { Charset } from "./core/units/format.ts";
+import { verdictsOn } from "./document/verdicts.ts";
 import type { Message } from "./editor/message.ts";
-import { type EditorState, openedState } from "./editor/state.ts";
+import { type EditorState, type Judged, openedState } from "./editor/state.ts";
 import { update } from "./editor/update.ts";
 import type { OpenedChain } from "./effects/chain-files.ts";
 import type { ContextChain } from "./effects/chain-text.ts";
@@ -77,6 +78,7 @@ export function startWorkstation({
     if (after.document !== before.document || after.saved !== before.saved) {
       journalled(after, after.saved, journal);
     }
+    if (after.resolved !== before.resolved) judge();
     if (after !== before) for (const listener of listeners) listener();
     for (const command of commands) void perform(command, means).catch(tellFault);
   };
@@ -84,6 +86,10 @@ export function startWorkstation({
     journal.clear();
     leave();
   };
+  const judge = judgeLater(
+    () => state,
+    (judged) => dispatch({ type: "judged", judged }),
+  );
   const means = { presets, journal, state: () => state, dispatch, quit };
   /** A fault of the program ends it as an exception would, with the terminal given back. */
   const tellFault = (error: unknown): void => {
@@ -108,6 +114,7 @@ export function startWorkstation({
   });
   terminal.onKey((key) => dispatch({ type: "key", key }));
   terminal.onResize((to) => dispatch({ type: "resized", size: to }));
+  judge();
   setImmediate(() => lookAround({ presets, journal, dispatch }));
   return {
     state: () => state,
@@ -116,6 +123,18 @@ export function startWorkstation({
       screen.unmount();
       terminal.close();
     }),
+  };
+}
+
+/** Verdicts on the latest chain, after the frame that shows it; keys that wait go first. */
+function judgeLater(state: () => EditorState, tell: (judged: Judged) => void): () => void {
+  let waiting: NodeJS.Immediate | undefined;
+  return () => {
+    clearImmediate(waiting);
+    waiting = setImmediate(() => {
+      const { resolved } = state();
+      tell({ resolved, verdicts: verdictsOn(resolved) });
+    });
   };
 }
 

@@ -2,7 +2,7 @@ import type { ResolvedChain } from "../document/resolve.ts";
 import type { ChainDocument, StageDocument } from "../document/types.ts";
 import type { AfterSave } from "./dialog.ts";
 import type { KeyPress } from "./key-press.ts";
-import type { EditorContext, EditorState, FileOrigin, Size } from "./state.ts";
+import type { EditorContext, EditorState, FileOrigin, Judged, Size } from "./state.ts";
 
 /** What happened: a key, or the outcome of something that was asked for. */
 export type Message =
@@ -23,6 +23,7 @@ export type Message =
   | { readonly type: "presets-listed"; readonly presets: readonly PresetLine[] }
   | { readonly type: "preset-seen"; readonly name: string; readonly look: PresetLook }
   | { readonly type: "left-behind"; readonly work: LeftWork }
+  | { readonly type: "judged"; readonly judged: Judged }
   | { readonly type: "preset-held"; readonly name: string; readonly command: KeepCommand }
   | { readonly type: "told"; readonly text: string; readonly bad: boolean };
 

@@ -1,6 +1,7 @@
 import type { DocumentContext } from "../document/context.ts";
 import type { ResolvedChain } from "../document/resolve.ts";
 import type { ChainDocument } from "../document/types.ts";
+import type { Verdicts } from "../document/verdicts.ts";
 import type { Dialog } from "./dialog.ts";
 import { type History, NO_HISTORY } from "./history.ts";
 import type { NudgeStep } from "./nudge.ts";
@@ -30,7 +31,14 @@ export interface EditorState {
   readonly nudge: NudgeStep;
   readonly dialog: Dialog | undefined;
   readonly notice: Notice | undefined;
+  /** The last verdicts, with the chain that they were given on: they come a little after an edit. */
+  readonly judged: Judged | undefined;
   readonly size: Size;
+}
+
+export interface Judged {
+  readonly resolved: ResolvedChain;
+  readonly verdicts: Verdicts;
 }
 
 /** A context of documents that knows the folder which file names are relative to. */
@@ -106,6 +114,7 @@ export function openedState({ document, resolved, context, file, size }: StartOp
     nudge: { type: "series", series: "E24" },
     dialog: undefined,
     notice: undefined,
+    judged: undefined,
     size,
   };
 }
@@ -125,3 +134,7 @@ export const shownChain = ({ resolved, ghost }: EditorState): ResolvedChain =>
 /** The response that is kept behind the one shown. */
 export const chainBehind = ({ resolved, ghost }: EditorState): ResolvedChain | undefined =>
   ghost === undefined ? undefined : ghost.inFront ? resolved : ghost.resolved;
+
+/** Verdicts on the chain as it stands; undefined while they are being worked out. */
+export const verdictsNow = ({ judged, resolved }: EditorState): Verdicts | undefined =>
+  judged?.resolved === resolved ? judged.verdicts : undefined;

@@ -56,6 +56,8 @@ export function update(state: EditorState, message: Message): Step {
       return seen(state, message.name, message.look);
     case "left-behind":
       return askAboutLeftWork(state, message.work);
+    case "judged":
+      return step({ ...state, judged: message.judged });
     case "preset-held":
       return askToReplace(state, message.name, message.command);
     case "told":

@@ -4,9 +4,9 @@ import type { Charset } from "../core/units/format.ts";
 import type { RawValue } from "../document/types.ts";
 import type { FieldDialog } from "../editor/dialog.ts";
 import { type Field, fieldsOf, type Row, rowsOf } from "../editor/rows.ts";
-import type { EditorState, Size } from "../editor/state.ts";
+import { type EditorState, type Size, verdictsNow } from "../editor/state.ts";
 import { cut, fitted, fittedLine, spread, widthOf, wrappedLines } from "./cells.ts";
-import { fixed } from "./numbers.ts";
+import { fixed, marginText, signed } from "./numbers.ts";
 import { type Line, type Piece, piece } from "./paint.ts";
 import { shownLines } from "./scroll.ts";
 import { plainWords, signsOf } from "./signs.ts";
@@ -22,7 +22,7 @@ export function chainPane(
   size: Size,
   charset: Charset,
 ): readonly Line[] {
-  const shares = sharesByRow(state, reading, charset);
+  const shares = [...sharesByRow(state, reading, charset), ...verdictTexts(state, charset)];
   const rows = rowsOf(state.document);
   const blocks = (isShort: boolean) =>
     rows.map((row, k) =>
@@ -61,6 +61,19 @@ function sharesByRow({ document }: EditorState, { shares }: Reading, charset: Ch
       inLine += 1;
       return text(inLine);
     }),
+  ];
+}
+
+/** Behind load and converter stand no shares but how far what folds and the limits are kept, in the limit's unit. */
+function verdictTexts(state: EditorState, charset: Charset): readonly string[] {
+  const verdicts = verdictsNow(state);
+  const { folding, limits = [] } = verdicts ?? {};
+  return [
+    "",
+    folding === undefined ? "" : `folds ${signed(folding.marginDb, 1, charset)} dB`,
+    ...limits.map(({ margin }, k) =>
+      marginText(margin, state.resolved.limits[k]?.quantity ?? "gain", charset),
+    ),
   ];
 }
 

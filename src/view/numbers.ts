@@ -1,5 +1,6 @@
 import { type Charset, formatQuantity } from "../core/units/format.ts";
 import type { UnitTag } from "../core/units/unit.ts";
+import type { LimitQuantity } from "../document/types.ts";
 import { signsOf } from "./signs.ts";
 
 /** A value with a fixed number of decimals, so that it does not jump while the cursor moves. */
@@ -34,4 +35,11 @@ export function ratioText(ratio: number, charset: Charset): string {
   if (ratio === 0) return "0";
   const exponent = Math.floor(Math.log10(ratio));
   return exponent >= -3 && exponent < 5 ? ratio.toPrecision(5) : ratio.toExponential(4);
+}
+
+/** A margin with its sign: how far a limit is kept, or by how much it is missed. */
+export function marginText(margin: number, quantity: LimitQuantity, charset: Charset): string {
+  if (quantity === "gain") return `${signed(margin, 2, charset)} dB`;
+  if (quantity === "phase") return `${signed(margin, 1, charset)}${charset === "ascii" ? " deg" : "°"}`;
+  return `${margin > 0 ? "+" : ""}${scaled(margin, "second", 3, charset)}`;
 }

@@ -1,13 +1,15 @@
 import type { Chain } from "../core/chain.ts";
 import { foldHz } from "../core/fold.ts";
+import { marginOf } from "../core/limits/limit.ts";
 import { type Reading, readAt } from "../core/response/exact.ts";
 import { unwrappedAt } from "../core/response/phase.ts";
 import { wrapDeg } from "../core/units/decibel.ts";
 import type { Charset } from "../core/units/format.ts";
+import type { ResolvedLimit } from "../document/limits.ts";
 import { chainOnCharts, ghostOnCharts } from "../editor/selectors.ts";
 import type { EditorState, Size } from "../editor/state.ts";
-import { fittedLine, widthOf } from "./cells.ts";
-import { fixed, ratioText, scaled, signed } from "./numbers.ts";
+import { cut, fittedLine, widthOf } from "./cells.ts";
+import { fixed, marginText, ratioText, scaled, signed } from "./numbers.ts";
 import { type Line, type Piece, piece } from "./paint.ts";
 
 interface Entry {
@@ -38,7 +40,7 @@ export function readingPane(
 ): readonly Line[] {
   const phase = phaseText(reading, size.columns < WIDE ? Number.NaN : continuousDeg, charset);
   const lines = [
-    ...packed(entriesOf(state, reading, phase, charset), size.columns),
+    ...packed(entriesOf(state, reading, continuousDeg, phase, charset), size.columns),
     pinLine(state, reading, charset),
     ghostLine(state, reading, charset),
   ].filter((line) => line.length > 0);
@@ -54,7 +56,13 @@ function phaseText({ phaseDeg }: Reading, continuousDeg: number, charset: Charse
   return `${text} (${fixed(phaseDeg + 360 * turns, 2, charset)}${degrees(charset)})`;
 }
 
-function entriesOf(state: EditorState, reading: Reading, phase: string, charset: Charset): readonly Entry[] {
+function entriesOf(
+  state: EditorState,
+  reading: Reading,
+  continuousDeg: number,
+  phase: string,
+  charset: Charset,
+): readonly Entry[] {
   const { converter } = chainOnCharts(state);
   return [
     entry("at", scaled(reading.freqHz, "hertz", 5, charset), 15),
@@ -64,10 +72,39 @@ function entriesOf(state: EditorState, reading: Reading, phase: string, charset:
     entry("phase", phase, phase.includes("(") ? 27 : 15),
     entry("delay", scaled(reading.groupDelayS, "second", 4, charset), 17),
     entry("slope", `${fixed(reading.slopeDbPerDecade, 2, charset)} dB/dec`, 22),
+    ...nearestMargin(state, reading, continuousDeg, charset),
     ...(converter === undefined
       ? []
       : [entry("folds to", scaled(foldHz(reading.freqHz, converter.rateHz), "hertz", 5, charset), 19)]),
   ];
+}
+
+/** The limit that the cursor's frequency is nearest to or furthest beyond, of those that bound anything there. */
+function nearestMargin(
+  state: EditorState,
+  reading: Reading,
+  continuousDeg: number,
+  charset: Charset,
+): readonly Entry[] {
+  const { chain, limits } = chainOnCharts(state);
+  const { freqHz } = reading;
+  const margins = limits
+    .filter(({ fromHz, toHz }) => freqHz >= fromHz && freqHz <= toHz)
+    .map((limit) => ({ limit, margin: marginOf(limit, valueAt(chain, limit, reading, continuousDeg)) }))
+    .filter(({ margin }) => !Number.isNaN(margin));
+  const [first, ...others] = margins;
+  if (first === undefined) return [];
+  const nearest = others.reduce((least, each) => (each.margin < least.margin ? each : least), first);
+  const text = `${marginText(nearest.margin, nearest.limit.quantity, charset)} (${cut(nearest.limit.name, 16, charset)})`;
+  return [entry("margin", text, 34)];
+}
+
+function valueAt(chain: Chain, limit: ResolvedLimit, reading: Reading, continuousDeg: number): number {
+  if (limit.quantity === "delay") return reading.groupDelayS;
+  if (limit.quantity === "phase") {
+    return continuousDeg + wrapDeg(reading.phaseDeg - continuousDeg);
+  }
+  return reading.gainDb - (limit.reHz === undefined ? 0 : readAt(chain, limit.reHz).gainDb);
 }
 
 /** Entries one after the other in as few lines as they need, each at a place of its own. */

@@ -2,7 +2,7 @@ import type { Against } from "../core/chain.ts";
 import { plainText } from "../core/text.ts";
 import type { Charset } from "../core/units/format.ts";
 import { chainOnCharts, lookOf } from "../editor/selectors.ts";
-import { type EditorState, isUnsaved } from "../editor/state.ts";
+import { type EditorState, isUnsaved, verdictsNow } from "../editor/state.ts";
 import { spread } from "./cells.ts";
 import { type Line, piece } from "./paint.ts";
 import { signsOf } from "./signs.ts";
@@ -20,10 +20,22 @@ export function stateLine(state: EditorState, columns: number, charset: Charset)
   const title = plainText(state.resolved.title, 200) || "untitled chain";
   return spread(
     [piece(title, "strong"), ...onCharts(state, dot)],
-    [...unsaved, piece(`  ${AGAINST[chainOnCharts(state).against]}`, "faint")],
+    [...unsaved, ...limitsMet(state), piece(`  ${AGAINST[chainOnCharts(state).against]}`, "faint")],
     columns,
     charset,
   );
+}
+
+/** Whether the limits are met; nothing where there are none. */
+function limitsMet(state: EditorState): Line {
+  const { limits } = state.resolved;
+  const verdicts = verdictsNow(state);
+  if (limits.length === 0 && verdicts?.folding === undefined) return [];
+  if (verdicts === undefined) return [piece("  limits ...", "faint")];
+  const all = [...verdicts.limits, ...(verdicts.folding === undefined ? [] : [verdicts.folding])];
+  const failed = all.filter(({ pass }) => !pass).length;
+  if (failed === 0) return [piece("  limits met", "good")];
+  return [piece(`  ${failed} of ${all.length} limits NOT met`, "bad")];
 }
 
 /** What the charts show where that is not the chain as it stands. */

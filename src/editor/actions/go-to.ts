@@ -5,7 +5,7 @@ import { formatQuantity } from "../../core/units/format.ts";
 import { parseQuantity } from "../../core/units/quantity.ts";
 import type { ListItem } from "../dialog.ts";
 import { type Step, step, told } from "../message.ts";
-import { type EditorState, shownChain } from "../state.ts";
+import { type EditorState, shownChain, verdictsNow } from "../state.ts";
 import { cursorAt } from "./cursor.ts";
 
 interface Place {
@@ -25,9 +25,25 @@ export function placesOf(state: EditorState): readonly Place[] {
           { freqHz: converter.rateHz / 2, what: "half the sample rate" },
         ];
   return [
+    ...worstPoints(state),
     ...landmarks(chain, fromHz, toHz),
     ...edges.filter(({ freqHz }) => freqHz >= fromHz && freqHz <= toHz),
   ].sort((one, other) => one.freqHz - other.freqHz);
+}
+
+/** Where limits and folding are kept worst, once that is known. */
+function worstPoints(state: EditorState): readonly Place[] {
+  const verdicts = verdictsNow(state);
+  const { fromHz, toHz } = state.window;
+  const limits = (verdicts?.limits ?? []).map(({ worstFreqHz }, k) => ({
+    freqHz: worstFreqHz,
+    what: `worst of ${state.resolved.limits[k]?.name}`,
+  }));
+  const folding =
+    verdicts?.folding === undefined
+      ? []
+      : [{ freqHz: verdicts.folding.worstFreqHz, what: "worst of what folds" }];
+  return [...limits, ...folding].filter(({ freqHz }) => freqHz >= fromHz && freqHz <= toHz);
 }
 
 /** The next place of note above or below the cursor. */
