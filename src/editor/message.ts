@@ -20,7 +20,12 @@ export type Message =
       readonly words: string;
       readonly after: AfterSave | undefined;
     }
-  | { readonly type: "presets-listed"; readonly presets: readonly PresetLine[] }
+  | {
+      readonly type: "presets-listed";
+      readonly presets: readonly PresetLine[];
+      /** Whether the list is shown also where it is not open: after one of them was renamed or removed. */
+      readonly opens: boolean;
+    }
   | { readonly type: "preset-seen"; readonly name: string; readonly look: PresetLook }
   | { readonly type: "left-behind"; readonly work: LeftWork }
   | { readonly type: "judged"; readonly judged: Judged }

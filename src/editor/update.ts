@@ -51,7 +51,7 @@ export function update(state: EditorState, message: Message): Step {
     case "save-held":
       return saveWasHeld(state, message.path, message.words, message.after);
     case "presets-listed":
-      return showPresets(state, message.presets);
+      return showPresets(state, message.presets, message.opens);
     case "preset-seen":
       return seen(state, message.name, message.look);
     case "left-behind":

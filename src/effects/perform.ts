@@ -37,7 +37,7 @@ export async function perform(command: Command, means: Means): Promise<void> {
     case "save":
       return save(command, means);
     case "list-presets":
-      return dispatch({ type: "presets-listed", presets: await means.presets.list() });
+      return dispatch({ type: "presets-listed", presets: await means.presets.list(), opens: false });
     case "look-at-preset":
       return lookAtPreset(command.name, means);
     case "take-preset":
@@ -180,7 +180,7 @@ async function changePresets(
   changed: Awaited<ReturnType<Presets["rename"]>>,
   { presets, dispatch }: Means,
 ): Promise<void> {
-  dispatch({ type: "presets-listed", presets: await presets.list() });
+  dispatch({ type: "presets-listed", presets: await presets.list(), opens: true });
   if (!changed.ok) dispatch(refused(changed.problem));
 }
 

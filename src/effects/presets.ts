@@ -79,7 +79,9 @@ function shippedOf(folder: string, notes: Set<string>): ReadonlyMap<string, Ship
   return new Map();
 }
 
-const byName = (one: OwnPreset, other: OwnPreset): number => (one.name < other.name ? -1 : 1);
+/** `channel 2` before `channel 10`. */
+const { compare } = new Intl.Collator("en", { numeric: true });
+const byName = (one: OwnPreset, other: OwnPreset): number => compare(one.name, other.name);
 
 function ownEntry({ name, text }: OwnPreset): PresetEntry {
   return { ...(presetHead(text) ?? { type: "chain", title: "" }), name, origin: "own" };

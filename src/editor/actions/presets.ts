@@ -1,4 +1,4 @@
-import type { ListItem, QuestionDialog } from "../dialog.ts";
+import { itemInHand, type ListDialog, type ListItem, type QuestionDialog } from "../dialog.ts";
 import { chainFileName } from "../file-name.ts";
 import type { PresetLine } from "../message.ts";
 import { type Step, step, told } from "../message.ts";
@@ -8,15 +8,35 @@ import { putAway } from "./files.ts";
 import { rowInHand } from "./rows.ts";
 import { nameOf } from "./stages.ts";
 
-export const browsePresets = (state: EditorState): Step => step(state, { type: "list-presets" });
+/** The list opens at once, so that keys typed ahead go to it, and is filled when the presets are known. */
+export const browsePresets = (state: EditorState): Step =>
+  step({ ...state, dialog: presetList([], NO_FILTER), notice: undefined }, { type: "list-presets" });
+
+const NO_FILTER = { text: "", caret: 0 };
+
+const presetList = (items: readonly ListItem[], filter: ListDialog["filter"]): ListDialog => ({
+  type: "list",
+  purpose: "presets",
+  title: "presets",
+  items,
+  index: 0,
+  filter,
+  look: undefined,
+});
 
 /** A preset's place in the list says whose it is and what it is. */
 const groupOf = ({ origin, type }: PresetLine): string =>
   `${origin === "own" ? "your own" : "shipped"} ${type}s`;
 
-/** The list of presets, the response of the first one asked for at once. */
-export function showPresets(state: EditorState, presets: readonly PresetLine[]): Step {
-  if (presets.length === 0) return told(state, "there are no presets", true);
+/** Fills the list of presets; one that was closed meanwhile stays closed. The first item is looked at. */
+export function showPresets(
+  { dialog, ...rest }: EditorState,
+  presets: readonly PresetLine[],
+  opens: boolean,
+): Step {
+  const state = { ...rest, dialog };
+  const isOpen = dialog?.type === "list" && dialog.purpose === "presets";
+  if (!isOpen && !opens) return step(state);
   const items = presets.map(
     (preset): ListItem => ({
       value: preset.name,
@@ -25,17 +45,10 @@ export function showPresets(state: EditorState, presets: readonly PresetLine[]):
       group: groupOf(preset),
     }),
   );
-  const dialog = {
-    type: "list",
-    purpose: "presets",
-    title: "presets",
-    items,
-    index: 0,
-    filter: { text: "", caret: 0 },
-    look: undefined,
-  } as const;
-  const first = items[0] as ListItem;
-  return step({ ...state, dialog, notice: undefined }, { type: "look-at-preset", name: first.value });
+  const list = presetList(items, isOpen ? dialog.filter : NO_FILTER);
+  const first = itemInHand(list);
+  const shown = { ...state, dialog: list };
+  return first === undefined ? step(shown) : step(shown, { type: "look-at-preset", name: first.value });
 }
 
 /** Takes a preset: a stage goes in at the row in hand, a chain takes the place of the one there is. */
