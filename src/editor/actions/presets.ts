@@ -24,6 +24,8 @@ const presetList = (items: readonly ListItem[], filter: ListDialog["filter"]): L
   look: undefined,
 });
 
+const ORDER = ["shipped chains", "shipped stages", "your own chains", "your own stages"];
+
 /** A preset's place in the list says whose it is and what it is. */
 const groupOf = ({ origin, type }: PresetLine): string =>
   `${origin === "own" ? "your own" : "shipped"} ${type}s`;
@@ -37,7 +39,10 @@ export function showPresets(
   const state = { ...rest, dialog };
   const isOpen = dialog?.type === "list" && dialog.purpose === "presets";
   if (!isOpen && !opens) return step(state);
-  const items = presets.map(
+  const inOrder = [...presets].sort(
+    (one, other) => ORDER.indexOf(groupOf(one)) - ORDER.indexOf(groupOf(other)),
+  );
+  const items = inOrder.map(
     (preset): ListItem => ({
       value: preset.name,
       label: preset.name,
