@@ -14,7 +14,7 @@ export interface ChainReading {
   readonly gainDb: number | null;
   /** −gain. */
   readonly attenuationDb: number | null;
-  /** |H|; null where it is beyond a double, above about 1e308. */
+  /** |H|; null where it is beyond a double: above about 1e308, or below about 1e-308 and yet no null. */
   readonly ratio: number | null;
   /** (−180, 180]. */
   readonly phaseDeg: number | null;
@@ -115,7 +115,7 @@ function response(reading: Response, unwrappedDeg: number): ChainReading {
     gainDb: finiteOrNull(gainDb),
     // Not −0 where the gain is 0 dB.
     attenuationDb: finiteOrNull(0 - gainDb),
-    ratio: finiteOrNull(reading.ratio),
+    ratio: gainDb === -Infinity ? 0 : finiteOrNull(reading.ratio) || null,
     phaseDeg: finiteOrNull(reading.phaseDeg),
     phaseUnwrappedDeg: finiteOrNull(unwrappedDeg),
     groupDelayS: finiteOrNull(reading.groupDelayS),

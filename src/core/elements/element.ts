@@ -1,3 +1,4 @@
+import type { Dual } from "../dual.ts";
 import type { Polynomial, Rational } from "../rational.ts";
 
 /**
@@ -67,10 +68,8 @@ export interface RationalTransfer {
 
 export interface IrrationalTransfer {
   readonly type: "irrational";
-  /**
-   * Value and derivative at `omega` (rad/s): returns `[re, im, dRe/dω, dIm/dω]`; NaN where there is no value.
-   */
-  readonly at: (omega: number) => readonly [number, number, number, number];
+  /** Value and derivative by ln ω at `omega` (rad/s); NaN where there is no value. */
+  readonly at: (omega: number) => Dual;
   /** Pure delay contained in it, seconds: taken out before phase is unwrapped. */
   readonly delayS: number;
   /** Frequencies in Hz between `fromHz` and `toHz` where it has nulls, corners or breaks; bounded in number. */

@@ -1,7 +1,20 @@
-import { add, type Dual, divide, dual, multiply, ONE, scale } from "../dual.ts";
+import {
+  add,
+  type Dual,
+  derivativeOf,
+  divide,
+  dual,
+  exponential,
+  integerPower,
+  multiply,
+  negate,
+  ONE,
+  plain,
+  withDerivative,
+} from "../dual.ts";
 import { BUILT_IN_CONSTANTS, type Constants, type FormulaFunction, type FormulaTree } from "./tree.ts";
 
-/** A compiled expression: its value and derivative by ω at `s = jω`. */
+/** A compiled expression: its value and derivative by ln ω at `s = jω`. */
 export type Evaluate = (omega: number) => Dual;
 
 /** Compiles an expression to nested functions, once; what has no `s` in it becomes a number. */
@@ -12,10 +25,10 @@ export function compile(tree: FormulaTree, constants: Constants): Evaluate {
     case "constant":
       return always(constants[tree.name] ?? BUILT_IN_CONSTANTS[tree.name]);
     case "s":
-      return (omega) => dual(0, omega, 0, 1);
+      return (omega) => dual(0, omega, 0, omega);
     case "negate": {
       const of = compile(tree.of, constants);
-      return (omega) => scale(of(omega), -1);
+      return (omega) => negate(of(omega));
     }
     case "power": {
       const base = compile(tree.base, constants);
@@ -42,56 +55,70 @@ const always = (value: number): Evaluate => {
 
 const OPERATORS = {
   add,
-  subtract: (p: Dual, q: Dual) => add(p, scale(q, -1)),
+  subtract: (p: Dual, q: Dual) => add(p, negate(q)),
   multiply,
   divide,
 };
 
-function integerPower(base: Dual, exponent: number): Dual {
-  let result = ONE;
-  let square = base;
-  for (let rest = Math.abs(exponent); rest > 0; rest = Math.floor(rest / 2)) {
-    if (rest % 2 === 1) result = multiply(result, square);
-    square = multiply(square, square);
-  }
-  return exponent < 0 ? divide(ONE, result) : result;
-}
+/** `f(z)` from its value and `f'(z)`, by the chain rule. */
+const chain = (z: Dual, value: Dual, slope: Dual): Dual =>
+  withDerivative(value, multiply(slope, derivativeOf(z)));
 
 function exp(z: Dual): Dual {
-  const size = Math.exp(z.re);
-  return chain(z, size * Math.cos(z.im), size * Math.sin(z.im), (value) => value);
-}
-
-/** `f(z)` with derivative `f'(z)·z'`, where f' is worked out from f's value. */
-function chain(z: Dual, re: number, im: number, slopeOf: (value: Dual) => Dual): Dual {
-  const slope = slopeOf(dual(re, im));
-  return dual(re, im, slope.re * z.dRe - slope.im * z.dIm, slope.re * z.dIm + slope.im * z.dRe);
+  const value = pointExp(z);
+  return chain(z, value, value);
 }
 
 function log(z: Dual): Dual {
-  return chain(z, Math.log(Math.hypot(z.re, z.im)), Math.atan2(z.im, z.re), () =>
-    divide(ONE, dual(z.re, z.im)),
-  );
+  const size = Math.log(Math.hypot(z.re, z.im)) + z.exponent * Math.LN2;
+  return chain(z, dual(size, Math.atan2(z.im, z.re)), divide(ONE, z));
 }
 
 function sqrt(z: Dual): Dual {
-  const size = Math.sqrt(Math.hypot(z.re, z.im));
+  const odd = z.exponent % 2 !== 0;
+  const size = Math.sqrt(Math.hypot(z.re, z.im) * (odd ? 2 : 1));
   const angle = Math.atan2(z.im, z.re) / 2;
-  return chain(z, size * Math.cos(angle), size * Math.sin(angle), (root) => divide(dual(0.5), root));
+  const exponent = (z.exponent - (odd ? 1 : 0)) / 2;
+  const root = dual(size * Math.cos(angle), size * Math.sin(angle), 0, 0, exponent);
+  return chain(z, root, divide(HALF, root));
 }
+
+const sinh = (z: Dual): Dual => chain(z, pointSinh(z), pointCosh(z));
+const cosh = (z: Dual): Dual => chain(z, pointCosh(z), pointSinh(z));
+
+/** Its derivative as 1/cosh², which the quotient rule would lose in a difference. */
+function tanh(z: Dual): Dual {
+  const inverse = divide(ONE, pointCosh(z));
+  return chain(z, multiply(pointSinh(z), inverse), multiply(inverse, inverse));
+}
+
+/** Values alone, without derivatives. */
+function pointExp(z: Dual): Dual {
+  const { re, im } = plain(z);
+  return exponential(re, im, 0, 0);
+}
+
+function pointSinh(z: Dual): Dual {
+  // So near the origin it is the argument itself, even where that is below the least double.
+  if (z.exponent < TINY_EXPONENT) return dual(z.re, z.im, 0, 0, z.exponent);
+  const { re, im } = plain(z);
+  if (Math.abs(re) < LARGE_ARGUMENT) return dual(Math.sinh(re) * Math.cos(im), Math.cosh(re) * Math.sin(im));
+  return multiply(HALF, add(exponential(re, im, 0, 0), negate(exponential(-re, -im, 0, 0))));
+}
+
+function pointCosh(z: Dual): Dual {
+  const { re, im } = plain(z);
+  if (Math.abs(re) < LARGE_ARGUMENT) return dual(Math.cosh(re) * Math.cos(im), Math.sinh(re) * Math.sin(im));
+  return multiply(HALF, add(exponential(re, im, 0, 0), exponential(-re, -im, 0, 0)));
+}
+
+const HALF = dual(0.5);
+const TINY_EXPONENT = -500;
+const LARGE_ARGUMENT = 300;
 
 const J = dual(0, 1);
 const turned = (z: Dual): Dual => multiply(J, z);
-
-const sinh = (z: Dual): Dual => scale(add(exp(z), scale(exp(scale(z, -1)), -1)), 0.5);
-const cosh = (z: Dual): Dual => scale(add(exp(z), exp(scale(z, -1))), 0.5);
-
-/** Through `e^(−2|z|)`, so that a large argument gives ±1 and not Infinity/Infinity. */
-function tanh(z: Dual): Dual {
-  const sign = z.re < 0 ? -1 : 1;
-  const shrunk = exp(scale(z, -2 * sign));
-  return scale(divide(add(ONE, scale(shrunk, -1)), add(ONE, shrunk)), sign);
-}
+const turnedBack = (z: Dual): Dual => multiply(z, dual(0, -1));
 
 const FUNCTIONS: Readonly<Record<FormulaFunction, (z: Dual) => Dual>> = {
   exp,
@@ -100,7 +127,7 @@ const FUNCTIONS: Readonly<Record<FormulaFunction, (z: Dual) => Dual>> = {
   sinh,
   cosh,
   tanh,
-  sin: (z) => multiply(dual(0, -1), sinh(turned(z))),
+  sin: (z) => turnedBack(sinh(turned(z))),
   cos: (z) => cosh(turned(z)),
-  tan: (z) => multiply(dual(0, -1), tanh(turned(z))),
+  tan: (z) => turnedBack(tanh(turned(z))),
 };

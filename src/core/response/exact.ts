@@ -1,17 +1,7 @@
 import type { Chain } from "../chain.ts";
-import {
-  add,
-  type Dual,
-  divide,
-  dual,
-  evaluateRational,
-  magnitude,
-  multiply,
-  ONE,
-  scale,
-  ZERO,
-} from "../dual.ts";
-import { DB_PER_NEPER, fromDb, toDb, toDegrees, wrapDeg } from "../units/decibel.ts";
+import { type Dual, divide, isNull, levelDb, logDerivative, multiply, ONE, plain, ZERO } from "../dual.ts";
+import { evaluateRational } from "../dual-polynomial.ts";
+import { DB_PER_NEPER, fromDb, toDegrees, wrapDeg } from "../units/decibel.ts";
 import { carry, type Pair } from "./two-port.ts";
 
 /** Everything that is read at one frequency, from the exact response. */
@@ -52,18 +42,11 @@ export function readAt(chain: Chain, freqHz: number): Reading {
 /** Far above rounding, far below any bandwidth. */
 const LIMIT_STEP = 1e-9;
 
-/** A complex number with its derivative, times two to the power `exponent`: chains multiply far beyond 1e308. */
-interface Scaled {
-  readonly value: Dual;
-  readonly exponent: number;
-}
-
 interface Node {
-  /** Voltage and current behind the stage, to be multiplied by 2^exponent. */
+  /** Voltage and current behind the stage, up to a common factor. */
   readonly pair: Pair;
-  readonly exponent: number;
   /** Product of the stage's `n`. */
-  readonly n: Scaled;
+  readonly n: Dual;
 }
 
 function readStrictly(chain: Chain, freqHz: number): Reading {
@@ -72,14 +55,14 @@ function readStrictly(chain: Chain, freqHz: number): Reading {
   const { numerator, denominator } = transferOf(chain, nodes, omega);
   const gainDb = levelDb(numerator) - levelDb(denominator);
   const silent = gainDb === -Infinity;
-  const slope = add(logDerivative(numerator.value), scale(logDerivative(denominator.value), -1));
+  const [above, below] = [logDerivative(numerator), logDerivative(denominator)];
   return {
     freqHz,
     gainDb,
     ratio: silent ? 0 : fromDb(gainDb),
-    phaseDeg: silent ? Number.NaN : angleDeg(divide(numerator.value, denominator.value)),
-    groupDelayS: silent ? Number.NaN : -slope.im,
-    slopeDbPerDecade: silent ? Number.NaN : DB_PER_NEPER * Math.LN10 * omega * slope.re,
+    phaseDeg: silent ? Number.NaN : angleDeg(divide(numerator, denominator)),
+    groupDelayS: silent ? Number.NaN : (below.im - above.im) / omega,
+    slopeDbPerDecade: silent ? Number.NaN : DB_PER_NEPER * Math.LN10 * (above.re - below.re),
     shares: sharesOf(chain, nodes, omega),
     impedanceOhm: nodes.map(({ pair }) => impedance(pair)),
   };
@@ -88,23 +71,18 @@ function readStrictly(chain: Chain, freqHz: number): Reading {
 /** The node behind the source, then the node behind each stage; each holds the `n` of the stage before it. */
 function carryBack(chain: Chain, omega: number): Node[] {
   let pair = loadPair(chain, omega);
-  let exponent = 0;
   const nodes: Node[] = [];
   for (const { elements } of [...chain.stages].reverse()) {
-    const behind = { pair, exponent };
-    let n = UNIT;
+    const behind = pair;
+    let n = ONE;
     for (const element of [...elements].reverse()) {
       const carried = carry(element, pair, omega);
-      // An isolating element divides by the pair, and so by the pair's scale, and starts a new pair of its own.
-      const isolating = element.form === "isolating";
-      n = times(n, { value: carried.n, exponent: isolating ? -exponent : 0 });
-      const shift = shiftOf(Math.max(magnitude(carried.v), magnitude(carried.i)));
-      pair = { v: scale(carried.v, 2 ** -shift), i: scale(carried.i, 2 ** -shift) };
-      exponent = (isolating ? 0 : exponent) + shift;
+      n = multiply(n, carried.n);
+      pair = carried;
     }
-    nodes.unshift({ ...behind, n });
+    nodes.unshift({ pair: behind, n });
   }
-  nodes.unshift({ pair, exponent, n: UNIT });
+  nodes.unshift({ pair, n: ONE });
   return nodes;
 }
 
@@ -116,30 +94,29 @@ function loadPair(chain: Chain, omega: number): Pair {
 
 /** H as a fraction that needs no division by an impedance. */
 function transferOf(chain: Chain, nodes: readonly Node[], omega: number) {
-  const last = nodes[nodes.length - 1];
-  const output = nodes.reduce((product, node) => times(product, node.n), voltage(last));
-  if (chain.against === "input") return { numerator: output, denominator: voltage(nodes[0]) };
-  const { n, emf } = sourceAt(chain, nodes[0], omega);
-  const numerator = times(output, n);
+  const output = nodes.reduce((product, { n }) => multiply(product, n), nodes[nodes.length - 1].pair.v);
+  if (chain.against === "input") return { numerator: output, denominator: nodes[0].pair.v };
+  const { n, emf } = sourceAt(chain, nodes[0].pair, omega);
+  const numerator = multiply(output, n);
   if (chain.against === "emf") return { numerator, denominator: emf };
   // Against what the load would get with the chain taken out, ZL / (Zs + ZL).
-  const direct = sourceAt(chain, { pair: loadPair(chain, omega), exponent: 0, n: UNIT }, omega);
-  const directOutput = times({ value: loadPair(chain, omega).v, exponent: 0 }, direct.n);
-  return { numerator: times(numerator, direct.emf), denominator: times(emf, directOutput) };
-}
-
-/** The source's branch is one more series element: its `n`, and the EMF that the pair behind it stands for. */
-function sourceAt(chain: Chain, first: Node, omega: number): { n: Scaled; emf: Scaled } {
-  const carried = carry({ form: "series", impedance: chain.sourceImpedance }, first.pair, omega);
+  const load = loadPair(chain, omega);
+  const direct = sourceAt(chain, load, omega);
   return {
-    n: { value: carried.n, exponent: 0 },
-    emf: { value: carried.v, exponent: first.exponent },
+    numerator: multiply(numerator, direct.emf),
+    denominator: multiply(emf, multiply(load.v, direct.n)),
   };
 }
 
+/** The source's branch is one more series element: its `n`, and the EMF that the pair behind it stands for. */
+function sourceAt(chain: Chain, pair: Pair, omega: number): { n: Dual; emf: Dual } {
+  const { n, v } = carry({ form: "series", impedance: chain.sourceImpedance }, pair, omega);
+  return { n, emf: v };
+}
+
 function sharesOf(chain: Chain, nodes: readonly Node[], omega: number): Reading["shares"] {
-  const { n, emf } = sourceAt(chain, nodes[0], omega);
-  const voltageDb = nodes.map((node) => levelDb(voltage(node)));
+  const { n, emf } = sourceAt(chain, nodes[0].pair, omega);
+  const voltageDb = nodes.map(({ pair }) => levelDb(pair.v));
   return [
     { name: "source", gainDb: levelDb(n) + voltageDb[0] - levelDb(emf) },
     ...chain.stages.map(({ name }, k) => ({
@@ -149,34 +126,8 @@ function sharesOf(chain: Chain, nodes: readonly Node[], omega: number): Reading[
   ];
 }
 
-function impedance({ v, i }: Pair): { re: number; im: number } {
-  return magnitude(i) === 0 ? { re: Infinity, im: 0 } : divide(v, i);
-}
-
-const voltage = (node: Node): Scaled => ({ value: node.pair.v, exponent: node.exponent });
-
-const UNIT: Scaled = { value: ONE, exponent: 0 };
-
-function times(p: Scaled, q: Scaled): Scaled {
-  return normalised(multiply(p.value, q.value), p.exponent + q.exponent);
-}
-
-function normalised(value: Dual, exponent: number): Scaled {
-  const shift = shiftOf(magnitude(value));
-  return { value: scale(value, 2 ** -shift), exponent: exponent + shift };
-}
-
-/** The power of two that brings a magnitude near one; none for zero and for what is not finite. */
-function shiftOf(size: number): number {
-  return size > 0 && size < Infinity ? Math.max(-1000, Math.min(1000, Math.round(Math.log2(size)))) : 0;
-}
-
-const levelDb = ({ value, exponent }: Scaled): number => toDb(magnitude(value)) + exponent * toDb(2);
-
-/** `d(ln z)/dω`: nepers and radians per rad/s. */
-const logDerivative = (z: Dual): Dual => divide(dual(z.dRe, z.dIm), dual(z.re, z.im));
+const impedance = ({ v, i }: Pair): { re: number; im: number } =>
+  isNull(i) ? { re: Infinity, im: 0 } : plain(divide(v, i));
 
 /** Angle in (−180, 180]. */
-function angleDeg({ re, im }: Dual): number {
-  return wrapDeg(toDegrees(Math.atan2(im, re)));
-}
+const angleDeg = ({ re, im }: Dual): number => wrapDeg(toDegrees(Math.atan2(im, re)));

@@ -17,13 +17,14 @@ import {
   empty,
   sampleElement,
 } from "./samples.ts";
+import { settle } from "./settle.ts";
 
 /** The chain's response over a grid of frequencies. */
 export interface SampledResponse {
   readonly freqHz: Float64Array;
   /** −Infinity at a null; NaN where a measured response has no value. */
   readonly gainDb: Float64Array;
-  /** (−180, 180] */
+  /** (−180, 180]; NaN at a null and where there is no value. */
   readonly phaseDeg: Float64Array;
 }
 
@@ -51,6 +52,7 @@ export class Sampler {
     const gainDb = new Float64Array(this.freqHz.length);
     const phaseDeg = new Float64Array(this.freqHz.length);
     polar(transfer, transfer.exponent, gainDb, phaseDeg);
+    settle(chain, this.freqHz, gainDb, phaseDeg);
     return { freqHz: this.freqHz, gainDb, phaseDeg };
   }
 

@@ -1,3 +1,4 @@
+import { plain } from "../dual.ts";
 import type { DistributedElement, Element, IsolatingElement, LumpedElement } from "../elements/element.ts";
 import type { Polynomial, Rational } from "../rational.ts";
 import { divideBy, multiplyBy } from "./kernels.ts";
@@ -135,7 +136,7 @@ function sampleIsolating(element: IsolatingElement, omega: Float64Array): Elemen
 function sampleTransfer(transfer: IsolatingElement["transfer"], omega: Float64Array): ComplexArray {
   if (transfer.type === "irrational") {
     const out = empty(omega.length);
-    for (let k = 0; k < omega.length; k++) [out.re[k], out.im[k]] = transfer.at(omega[k]);
+    for (let k = 0; k < omega.length; k++) ({ re: out.re[k], im: out.im[k] } = plain(transfer.at(omega[k])));
     return out;
   }
   const [first, ...others] = transfer.sections;

@@ -1,15 +1,5 @@
-import {
-  add,
-  type Dual,
-  divide,
-  dual,
-  evaluatePolynomial,
-  evaluateRational,
-  multiply,
-  ONE,
-  scale,
-  ZERO,
-} from "../dual.ts";
+import { add, type Dual, divide, dual, exponential, multiply, negate, ONE, scale, ZERO } from "../dual.ts";
+import { evaluatePolynomial, evaluateRational } from "../dual-polynomial.ts";
 import type { DistributedElement, Element, IsolatingElement, Transfer } from "../elements/element.ts";
 
 /** Voltage and current at one point of the chain, up to a common factor. */
@@ -25,7 +15,7 @@ export interface Carried extends Pair {
 
 /**
  * Carries the pair from the output of one element to its input: `v' = a·v + b·i`, `i' = c·v + d·i`, and the
- * element's `n`. All with derivatives by ω.
+ * element's `n`. All with derivatives by ln ω.
  */
 export function carry(element: Element, pair: Pair, omega: number): Carried {
   switch (element.form) {
@@ -62,23 +52,12 @@ function through(n: Dual, a: Dual, b: Dual, c: Dual, d: Dual, { v, i }: Pair): C
  */
 function lineMatrix(line: DistributedElement, omega: number): { n: Dual; a: Dual; b: Dual; c: Dual } {
   const alphaL = line.lossNeper * Math.sqrt(omega / (2 * Math.PI * line.lossAtHz));
-  const alphaLSlope = alphaL / (2 * omega);
   const angle = omega * line.delayS;
-  const forward = dual(
-    Math.cos(angle),
-    Math.sin(angle),
-    -line.delayS * Math.sin(angle),
-    line.delayS * Math.cos(angle),
-  );
-  const twoWayLoss = Math.exp(-2 * alphaL);
-  const backward = multiply(
-    dual(twoWayLoss, 0, -2 * alphaLSlope * twoWayLoss),
-    dual(forward.re, -forward.im, forward.dRe, -forward.dIm),
-  );
-  const oneWayLoss = Math.exp(-alphaL);
-  const difference = add(forward, scale(backward, -1));
+  const forward = exponential(0, angle, 0, angle);
+  const backward = exponential(-2 * alphaL, -angle, -alphaL, -angle);
+  const difference = add(forward, negate(backward));
   return {
-    n: dual(2 * oneWayLoss, 0, -2 * alphaLSlope * oneWayLoss),
+    n: multiply(dual(2), exponential(-alphaL, 0, -alphaL / 2, 0)),
     a: add(forward, backward),
     b: scale(difference, line.z0Ohm),
     c: scale(difference, 1 / line.z0Ohm),
@@ -106,6 +85,6 @@ function value(f: Parameters<typeof evaluateRational>[0], omega: number): Dual {
 
 /** Open-circuit voltage transfer at one frequency; NaN where a measured response has no value. */
 export function transferAt(transfer: Transfer, omega: number): Dual {
-  if (transfer.type === "irrational") return dual(...transfer.at(omega));
+  if (transfer.type === "irrational") return transfer.at(omega);
   return transfer.sections.reduce((product, section) => multiply(product, value(section, omega)), ONE);
 }

@@ -1,7 +1,10 @@
+import { dual, exponential, integerPower, multiply } from "../dual.ts";
 import type { IrrationalTransfer } from "../elements/element.ts";
 
-/** At most so many nulls of a sampled stage are looked at singly. */
-const MOST_MARKS = 2000;
+/** At most so many nulls and tops between them are looked at singly, from the lowest on. */
+const MOST_LOBES = 1000;
+/** And so many images of the pass band, each with the nulls beside it. */
+const MOST_IMAGES = 1000;
 
 /** Value and derivative by its argument of a real function. */
 interface Sample {
@@ -12,7 +15,7 @@ interface Sample {
 /**
  * `e^(−jω·delay) · g(f/rate)^power` with g real: what hold, moving average and decimator have in common.
  * @param nullsHz spacing of the nulls
- * @param isNull which multiples of that spacing are nulls
+ * @param repeats whether the pass band comes back at every multiple of the rate
  */
 export function linearPhase(options: {
   readonly rate: number;
@@ -20,28 +23,31 @@ export function linearPhase(options: {
   readonly power: number;
   readonly size: (turns: number) => Sample;
   readonly nullsHz: number;
-  readonly isNull: (multiple: number) => boolean;
+  readonly repeats: boolean;
 }): Omit<IrrationalTransfer, "type"> {
-  const { rate, delayS, power, size, nullsHz, isNull } = options;
+  const { rate, delayS, power, size, nullsHz, repeats } = options;
   return {
     at: (omega) => {
       const turns = omega / (2 * Math.PI * rate);
-      const g = size(turns);
-      const real = g.value ** power;
-      const slope = (power * g.value ** (power - 1) * g.slope) / (2 * Math.PI * rate);
-      const [cos, sin] = [Math.cos(omega * delayS), -Math.sin(omega * delayS)];
-      return [real * cos, real * sin, slope * cos + real * sin * delayS, slope * sin - real * cos * delayS];
+      const { value, slope } = size(turns);
+      const real = integerPower(dual(value, 0, turns * slope), power);
+      return multiply(real, exponential(0, -omega * delayS, 0, -omega * delayS));
     },
     delayS,
     marks: (fromHz, toHz) => {
-      const marks: number[] = [];
-      const first = Math.max(1, Math.ceil(fromHz / nullsHz));
-      for (let k = first; k * nullsHz <= toHz && marks.length < MOST_MARKS; k++) {
-        if (isNull(k)) marks.push(k * nullsHz);
-      }
-      return marks;
+      const lobes = multiples(nullsHz / 2, fromHz, toHz, MOST_LOBES);
+      const seenHz = lobes[lobes.length - 1] ?? fromHz;
+      const images = repeats ? multiples(rate, seenHz, toHz + nullsHz, MOST_IMAGES) : [];
+      return [...lobes, ...images.flatMap((image) => [image - nullsHz, image, image + nullsHz])];
     },
   };
+}
+
+/** The multiples of `stepHz` within the range, at most so many of the lowest. */
+function multiples(stepHz: number, fromHz: number, toHz: number, most: number): readonly number[] {
+  const first = Math.max(1, Math.ceil(fromHz / stepHz));
+  const count = Math.min(most, Math.floor(toHz / stepHz) - first + 1);
+  return Array.from({ length: Math.max(0, count) }, (_, k) => (first + k) * stepHz);
 }
 
 /** `sin(π·x)`, exactly zero at whole numbers (to rounding of x) and with the sign that belongs there. */

@@ -1,12 +1,14 @@
+import { dual, exponential } from "../dual.ts";
 import type { IrrationalTransfer } from "../elements/element.ts";
 import { DB_PER_NEPER } from "../units/decibel.ts";
 import type { TabulatedResponse } from "./kind.ts";
 
 const RADIANS = Math.PI / 180;
+const NO_VALUE = dual(Number.NaN, Number.NaN, Number.NaN, Number.NaN);
 
 /**
  * Gain in dB and unwrapped phase, each linear in log f between the rows; NaN outside them.
- * `d ln H/dω` follows from the two slopes of the piece that the frequency lies in.
+ * `d ln H/d ln ω` follows from the two slopes of the piece that the frequency lies in.
  */
 export function tableTransfer(table: TabulatedResponse): Omit<IrrationalTransfer, "type"> {
   const { freqHz, gainDb, phaseDeg } = table;
@@ -14,18 +16,17 @@ export function tableTransfer(table: TabulatedResponse): Omit<IrrationalTransfer
     at: (omega) => {
       const freq = omega / (2 * Math.PI);
       const piece = pieceOf(freqHz, freq);
-      if (piece === undefined) return [Number.NaN, Number.NaN, Number.NaN, Number.NaN];
+      if (piece === undefined) return NO_VALUE;
       const width = Math.log(freqHz[piece + 1] / freqHz[piece]);
       const part = Math.log(freq / freqHz[piece]) / width;
       const gainStep = gainDb[piece + 1] - gainDb[piece];
       const phaseStep = phaseDeg[piece + 1] - phaseDeg[piece];
-      const size = Math.exp((gainDb[piece] + part * gainStep) / DB_PER_NEPER);
-      const angle = (phaseDeg[piece] + part * phaseStep) * RADIANS;
-      const re = size * Math.cos(angle);
-      const im = size * Math.sin(angle);
-      const neperSlope = gainStep / DB_PER_NEPER / (width * omega);
-      const angleSlope = (phaseStep * RADIANS) / (width * omega);
-      return [re, im, re * neperSlope - im * angleSlope, im * neperSlope + re * angleSlope];
+      return exponential(
+        (gainDb[piece] + part * gainStep) / DB_PER_NEPER,
+        (phaseDeg[piece] + part * phaseStep) * RADIANS,
+        gainStep / DB_PER_NEPER / width,
+        (phaseStep * RADIANS) / width,
+      );
     },
     delayS: 0,
     marks: (fromHz, toHz) => Array.from(freqHz).filter((freq) => freq >= fromHz && freq <= toHz),

@@ -1,4 +1,4 @@
-import { divide, dual } from "../../dual.ts";
+import { type Dual, divide, dual } from "../../dual.ts";
 import { irrational } from "../../elements/make.ts";
 import { defineKind, type NumberSpec, plain, sampleRate } from "../kind.ts";
 
@@ -34,13 +34,7 @@ export const biquad = defineKind<BiquadValues>({
   ],
   elements: ({ b0, b1, b2, a1, a2, rate }) => [
     irrational({
-      at: (omega) => {
-        const { re, im, dRe, dIm } = divide(
-          delayLine([b0, b1, b2], omega, 1 / rate),
-          delayLine([1, a1, a2], omega, 1 / rate),
-        );
-        return [re, im, dRe, dIm];
-      },
+      at: (omega) => divide(delayLine([b0, b1, b2], omega / rate), delayLine([1, a1, a2], omega / rate)),
       delayS: 0,
       marks: (fromHz, toHz) => {
         const base = [...rootTurns(b0, b1, b2), ...rootTurns(1, a1, a2), 0.5].map((turns) => turns * rate);
@@ -50,18 +44,17 @@ export const biquad = defineKind<BiquadValues>({
   ],
 });
 
-/** `Σ c_k·e^(−jωkT)` with its derivative; a sum that is nothing but rounding is zero. */
-function delayLine(coefficients: readonly number[], omega: number, period: number) {
+/** `Σ c_k·e^(−jk·angle)` with its derivative; a sum that is nothing but rounding is zero. */
+function delayLine(coefficients: readonly number[], angle: number): Dual {
   const size = coefficients.reduce((sum, c) => sum + Math.abs(c), 0);
   const settle = (value: number) => (Math.abs(value) <= 4 * Number.EPSILON * size ? 0 : value);
   let [re, im, dRe, dIm] = [0, 0, 0, 0];
   coefficients.forEach((c, k) => {
-    const angle = omega * k * period;
-    const [cos, sin] = [c * Math.cos(angle), c * Math.sin(angle)];
+    const [cos, sin] = [c * Math.cos(k * angle), c * Math.sin(k * angle)];
     re += cos;
     im -= sin;
-    dRe -= k * period * sin;
-    dIm -= k * period * cos;
+    dRe -= k * angle * sin;
+    dIm -= k * angle * cos;
   });
   return dual(settle(re), settle(im), dRe, dIm);
 }

@@ -1,3 +1,4 @@
+import { exponential } from "../../dual.ts";
 import { irrational } from "../../elements/make.ts";
 import { idealPorts, type PortValues } from "../ideal.ts";
 import { defineKind, duration } from "../kind.ts";
@@ -14,10 +15,7 @@ export const delay = defineKind<PortValues & { time: number }>({
   elements: ({ time, ...ports }) => [
     irrational(
       {
-        at: (omega) => {
-          const [re, im] = [Math.cos(omega * time), -Math.sin(omega * time)];
-          return [re, im, time * im, -time * re];
-        },
+        at: (omega) => exponential(0, -omega * time, 0, -omega * time),
         delayS: time,
         marks: () => [],
       },

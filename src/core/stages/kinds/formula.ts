@@ -29,20 +29,7 @@ export const formula = defineKind<PortValues & { H: FormulaValue }>({
     const constants = numbersOf(others);
     const sections = rationalForm(tree, constants);
     if (sections !== undefined) return [isolating(sections, ports)];
-    const evaluate = compile(tree, constants);
-    return [
-      irrational(
-        {
-          at: (omega) => {
-            const { re, im, dRe, dIm } = evaluate(omega);
-            return [re, im, dRe, dIm];
-          },
-          delayS: 0,
-          marks: () => [],
-        },
-        ports,
-      ),
-    ];
+    return [irrational({ at: compile(tree, constants), delayS: 0, marks: () => [] }, ports)];
   },
 });
 

@@ -13,7 +13,7 @@ export const hold = defineKind<{ rate: number }>({
   parts: [sampleRate("rate", "sample rate", { initial: "20k" })],
   elements: ({ rate }) => [
     irrational(
-      linearPhase({ rate, delayS: 0.5 / rate, power: 1, size: sinc, nullsHz: rate, isNull: () => true }),
+      linearPhase({ rate, delayS: 0.5 / rate, power: 1, size: sinc, nullsHz: rate, repeats: false }),
     ),
   ],
 });

@@ -22,7 +22,7 @@ export const movingAverage = defineKind<{ length: number; rate: number }>({
         power: 1,
         size: (turns) => dirichlet(turns, length),
         nullsHz: rate / length,
-        isNull: (multiple) => multiple % length !== 0,
+        repeats: true,
       }),
     ),
   ],

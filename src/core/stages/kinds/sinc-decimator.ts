@@ -23,7 +23,7 @@ export const sincDecimator = defineKind<{ order: number; ratio: number; rate: nu
         power: order,
         size: (turns) => dirichlet(turns, ratio),
         nullsHz: rate / ratio,
-        isNull: (multiple) => multiple % ratio !== 0,
+        repeats: true,
       }),
     ),
   ],
