@@ -25,27 +25,59 @@ export interface Extreme extends GainPoint {
  */
 export function gainPoints(chain: Chain, fromHz: number, toHz: number): readonly GainPoint[] {
   const count = Math.max(3, Math.ceil(Math.log10(toHz / fromHz) * SEARCH_PER_DECADE) + 1);
-  return [...logSpaced(fromHz, toHz, count), ...marksOf(chain, fromHz, toHz)]
-    .sort((a, b) => a - b)
+  const freqsHz = [...logSpaced(fromHz, toHz, count), ...marksOf(chain, fromHz, toHz)].sort((a, b) => a - b);
+  return apart(freqsHz)
     .map((freqHz) => ({ freqHz, gainDb: readAt(chain, freqHz).gainDb }))
     .filter((point) => !Number.isNaN(point.gainDb));
 }
+
+/** Frequencies that are the same but for rounding are one, the middle one: between them nothing rises or falls. */
+function apart(ascending: readonly number[]): readonly number[] {
+  const runs: number[][] = [];
+  for (const freqHz of ascending) {
+    const run = runs[runs.length - 1];
+    if (run !== undefined && freqHz <= run[0] * (1 + ROUNDING)) run.push(freqHz);
+    else runs.push([freqHz]);
+  }
+  return runs.map((run) => run[Math.floor(run.length / 2)]);
+}
+
+const ROUNDING = 1e-14;
 
 /** Less than this below its surroundings a dip is rounding; in dB. */
 const LEAST_DEPTH_DB = 1e-9;
 /** So far down a dip that goes on falling to the last digit of its frequency is a null. */
 const NULL_DB = -240;
 
-/** Local peaks, dips and nulls between two frequencies, ascending, each refined on the exact response. */
+/** So many of each are looked for, from the lowest frequency on: a sampled stage has them without end. */
+const MOST_EXTREMES = 400;
+const MOST_CROSSINGS = 400;
+
+/** By the points they were found between: several questions about one range ask for the same ones. */
+const known = new WeakMap<readonly GainPoint[], readonly Extreme[]>();
+
+/**
+ * Local peaks, dips and nulls among the points, ascending, each refined on the chain's exact response; at most
+ * `MOST_EXTREMES` of them.
+ */
 export function extremes(chain: Chain, points: readonly GainPoint[]): readonly Extreme[] {
+  const found = known.get(points) ?? findExtremes(chain, points);
+  known.set(points, found);
+  return found;
+}
+
+function findExtremes(chain: Chain, points: readonly GainPoint[]): readonly Extreme[] {
   const found: Extreme[] = [];
-  for (let k = 1; k + 1 < points.length; k++) {
+  for (let k = 1; k + 1 < points.length && found.length < MOST_EXTREMES; k++) {
     const [before, here, after] = [points[k - 1], points[k], points[k + 1]];
-    if (rises(before, here) && rises(after, here)) found.push(refine(chain, before, after, "peak"));
-    if (rises(here, before) && rises(here, after)) found.push(refineDip(chain, before, here, after));
+    if (isPeak(points, k)) found.push(refine(chain, before, after, "peak"));
+    else if (rises(here, before) && rises(here, after)) found.push(refineDip(chain, before, here, after));
   }
   return found;
 }
+
+const isPeak = (points: readonly GainPoint[], k: number): boolean =>
+  k > 0 && k + 1 < points.length && rises(points[k - 1], points[k]) && rises(points[k + 1], points[k]);
 
 const rises = (from: GainPoint, to: GainPoint): boolean => to.gainDb - from.gainDb > LEAST_DEPTH_DB;
 
@@ -67,13 +99,14 @@ function refine(chain: Chain, before: GainPoint, after: GainPoint, what: "peak" 
 }
 
 /**
- * Frequencies at which the gain passes a level (dB), ascending, to the last digits. Between two points of the search
- * the gain also turns at its extremes: those are looked at too, so that a pair of crossings is not missed.
+ * Frequencies at which the gain passes a level (dB), ascending, to the last digits; at most `MOST_CROSSINGS`. Between
+ * two points of the search the gain also turns at its extremes: those are looked at too, so that a pair of crossings
+ * is not missed.
  */
 export function crossings(chain: Chain, points: readonly GainPoint[], levelDb: number): readonly number[] {
   const turns = [...points, ...extremes(chain, points)].sort((a, b) => a.freqHz - b.freqHz);
   const found: number[] = [];
-  for (let k = 0; k + 1 < turns.length; k++) {
+  for (let k = 0; k + 1 < turns.length && found.length < MOST_CROSSINGS; k++) {
     const [here, next] = [turns[k], turns[k + 1]];
     if (here.gainDb === levelDb) found.push(here.freqHz);
     else if (here.gainDb > levelDb !== next.gainDb > levelDb && next.gainDb !== levelDb) {
@@ -93,10 +126,17 @@ function crossing(chain: Chain, fromHz: number, toHz: number, levelDb: number): 
   return Math.exp(findZero(above, Math.log(fromHz), Math.log(toHz)));
 }
 
+/** The highest peaks among the points are refined: one beside the highest point may rise above it. */
+const MOST_TOPS = 20;
+
 /** The greatest gain between two frequencies, its own frequency refined; undefined where there is no value. */
 export function greatestGain(chain: Chain, points: readonly GainPoint[]): GainPoint | undefined {
-  const peaks = extremes(chain, points).filter((extreme) => extreme.what === "peak");
-  return [...points, ...peaks].reduce<GainPoint | undefined>(
+  const tops = [...points.keys()]
+    .filter((k) => isPeak(points, k))
+    .sort((one, other) => points[other].gainDb - points[one].gainDb)
+    .slice(0, MOST_TOPS)
+    .map((k) => refine(chain, points[k - 1], points[k + 1], "peak"));
+  return [...points, ...tops].reduce<GainPoint | undefined>(
     (best, point) => (best === undefined || point.gainDb > best.gainDb ? point : best),
     undefined,
   );

@@ -2,8 +2,8 @@ import type { Chain } from "../chain.ts";
 import type { Complex } from "../complex.ts";
 import { chainRoots } from "../roots/groups.ts";
 
-/** So many frequencies at most are looked at beside the grid. */
-const MOST_MARKS = 4000;
+/** So many frequencies at most are looked at beside the grid; those beside roots come first. */
+const MOST_MARKS = 6000;
 
 /** Beside a root, in half bandwidths: enough to see every narrow peak or notch from both sides. */
 const OFFSETS = [-8, -3, -1, -0.4, 0, 0.4, 1, 3, 8] as const;
@@ -13,8 +13,8 @@ const LEAST_RELATIVE_WIDTH = 1e-7;
 
 /**
  * Frequencies in Hz, ascending, at which a response between `fromHz` and `toHz` may do something that a grid does not
- * see: complex poles and zeros with points beside them, multiples of a quarter wave of each line, nulls of sampled
- * stages, breaks of measured ones.
+ * see: complex poles and zeros with points beside them, multiples of a quarter wave of each line, nulls, tops and
+ * images of sampled stages, breaks of measured ones.
  */
 export function marksOf(chain: Chain, fromHz: number, toHz: number): readonly number[] {
   const omega0 = 2 * Math.PI * Math.sqrt(fromHz * toHz);
@@ -29,8 +29,9 @@ export function marksOf(chain: Chain, fromHz: number, toHz: number): readonly nu
       }),
     ),
   ];
-  const within = marks.filter((freqHz) => freqHz > fromHz && freqHz < toHz).sort((a, b) => a - b);
-  return within.filter((freqHz, k) => freqHz !== within[k - 1]).slice(0, MOST_MARKS);
+  const within = marks.filter((freqHz) => freqHz > fromHz && freqHz < toHz).slice(0, MOST_MARKS);
+  within.sort((a, b) => a - b);
+  return within.filter((freqHz, k) => freqHz !== within[k - 1]);
 }
 
 /** A pair of complex roots is looked at once, a real root not at all: it has no narrow features. */
