@@ -84,7 +84,7 @@ const closeTo = (value: number, expected: number, toleranceDb: number, what: str
   }
 };
 
-/** At 6.3 kHz the table allows nothing: that is where the weighting is normalised. */
+/** At 6.3 kHz the table allows nothing: that is where the weighting is normalised; at 31.5 kHz all below. */
 const ROUNDING = 1e-9;
 
 describe("published weightings", () => {
@@ -135,7 +135,7 @@ describe("published weightings", () => {
       const value = gain(row.f_hz);
       closeTo(value, row.pole_zero_db, 1.1e-5, `${row.f_hz} Hz`);
       expect(value - row.printed_db).toBeLessThanOrEqual(row.tolerance_plus_db + ROUNDING);
-      expect(value - row.printed_db).toBeGreaterThanOrEqual(row.tolerance_minus_db - ROUNDING);
+      expect(value - row.printed_db).toBeGreaterThanOrEqual((row.tolerance_minus_db ?? -Infinity) - ROUNDING);
     }
   });
 });
