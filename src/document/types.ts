@@ -57,11 +57,11 @@ export interface SourceDocument extends BranchDocument {
 export interface ConverterDocument {
   /** Samples per second. */
   readonly rate: RawValue;
-  readonly bits: RawValue;
+  readonly bits?: RawValue;
   /** Peak to peak, V. */
-  readonly fullScale: RawValue;
+  readonly fullScale?: RawValue;
   /** Highest frequency of interest, Hz. */
-  readonly band: RawValue;
+  readonly band?: RawValue;
 }
 
 export interface SweepDocument {

@@ -82,7 +82,7 @@ const converterParts = ({
   bandHz,
 }: NonNullable<ResolvedChain["converter"]>): readonly string[] => [
   `rate ${formatQuantity(rateHz, "samplesPerSecond", 6)}`,
-  `${bits} bits`,
-  `full scale ${formatQuantity(fullScaleV, "volt", 6)}`,
-  `band ${hertz(bandHz)}`,
+  ...(bits === undefined ? [] : [`${bits} bits`]),
+  ...(fullScaleV === undefined ? [] : [`full scale ${formatQuantity(fullScaleV, "volt", 6)}`]),
+  ...(bandHz === undefined ? [] : [`band ${hertz(bandHz)}`]),
 ];

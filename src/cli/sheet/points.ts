@@ -34,7 +34,7 @@ export function sheetPoints({ chain, sweep, converter }: ResolvedChain): SheetPo
     converter === undefined
       ? []
       : [
-          { freqHz: converter.bandHz, what: "band edge" },
+          ...(converter.bandHz === undefined ? [] : [{ freqHz: converter.bandHz, what: "band edge" }]),
           { freqHz: converter.rateHz / 2, what: "half rate" },
         ].filter(({ freqHz }) => freqHz >= fromHz && freqHz <= toHz);
   const plain = [...new Set([fromHz, ...decades(fromHz, toHz), toHz])].map((freqHz) => ({
