@@ -1,6 +1,6 @@
 import { type Branch, branchImpedance } from "../core/elements/branch.ts";
 import type { Rational } from "../core/rational.ts";
-import { problemAt } from "./problem.ts";
+import { beyondNumbers, productVanishes } from "./build.ts";
 import type { BranchDocument, SourceDocument } from "./types.ts";
 import { positive, type ValueReader, type ValueSpec } from "./value.ts";
 
@@ -26,7 +26,7 @@ export function resolveSource(source: SourceDocument = {}, reader: ValueReader):
   const emfV = reader.value(["source", "emf"], source.emf, positive("volt"), DEFAULT_EMF_V);
   const values = isEmpty(given) ? { ...given, R: 0 } : given;
   const impedance = branchImpedance(values);
-  checkFinite("source", impedance, reader);
+  checkSize("source", values, impedance, reader);
   return { values, impedance, emfV };
 }
 
@@ -34,7 +34,7 @@ export function resolveSource(source: SourceDocument = {}, reader: ValueReader):
 export function resolveLoad(load: BranchDocument = {}, reader: ValueReader): ResolvedBranch {
   const values = branchValues("load", load, positive("ohm"), "parallel", reader);
   const impedance = isEmpty(values) ? undefined : branchImpedance(values);
-  checkFinite("load", impedance, reader);
+  checkSize("load", values, impedance, reader);
   return { values, impedance };
 }
 
@@ -58,9 +58,13 @@ function branchValues(
 
 const isEmpty = ({ R, L, C }: Branch): boolean => R === undefined && L === undefined && C === undefined;
 
-function checkFinite(section: string, impedance: Rational | undefined, reader: ValueReader): void {
+function checkSize(
+  section: string,
+  values: Branch,
+  impedance: Rational | undefined,
+  reader: ValueReader,
+): void {
   // A value that is NaN has been refused by itself.
-  if (impedance === undefined || ![...impedance.num, ...impedance.den].includes(Infinity)) return;
-  const found = "the values together lead to numbers that are too large";
-  reader.refuse(problemAt([section], found, "values of the size that real parts have"));
+  const overflows = impedance !== undefined && [...impedance.num, ...impedance.den].includes(Infinity);
+  if (overflows || productVanishes({ ...values })) reader.refuse(beyondNumbers([section]));
 }

@@ -174,7 +174,11 @@ const stages: readonly Case[] = [
   ],
   [
     withStages('{"kind":"series","parts":§{"R":1,"L":1}}'),
-    'stages[0].parts.joined: joined is missing; allowed is "series" or "parallel"',
+    'stages[0].parts.joined: it is missing; allowed is "series" or "parallel"',
+  ],
+  [
+    withStages('{"kind":"shunt","parts":§{"L":1e-200,"C":1e-200,"joined":"series"}}'),
+    "stages[0].parts: the values together lead to numbers that are too large or too small; allowed is values of the size that real parts have",
   ],
   [
     withStages('{"kind":"table","parts":{"file":§"other.csv"}}'),
@@ -244,11 +248,19 @@ const sections: readonly Case[] = [
   [top('"source": {"emf": §"0 V"}'), 'source.emf: "0 V" is out of range; allowed is more than 0 V'],
   [top('"source": {"R": §"-1"}'), 'source.R: "-1" is out of range; allowed is 0 Ω or more'],
   [top('"load": {"R": §0}'), "load.R: 0 is out of range; allowed is more than 0 Ω"],
+  [
+    top('"load": §{"L": 1e-200, "C": "1e-200"}'),
+    "load: the values together lead to numbers that are too large or too small; allowed is values of the size that real parts have",
+  ],
+  [
+    top('"source": §{"R": 1e200, "C": 1e200}'),
+    "source: the values together lead to numbers that are too large or too small; allowed is values of the size that real parts have",
+  ],
   [top('"load": {"joined": §"both"}'), 'load.joined: found "both"; allowed is "series" or "parallel"'],
   [top('"load": §null'), "load: found null; allowed is an object with R, L, C, joined"],
   [
-    top('"converter": §{"rate": "20k"}'),
-    "converter.bits: it is missing; allowed is a whole number from 1 to 64",
+    top('"converter": §{"bits": 16}'),
+    "converter.rate: it is missing; allowed is a sample rate in S/s, as in 20k or 20 kS/s",
   ],
   [
     top('"converter": {"rate":"20k","bits":16,"fullScale":5,"band":§"11k"}'),

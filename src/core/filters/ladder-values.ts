@@ -32,7 +32,7 @@ export function ladderValues(spec: PrototypeSpec): Result<LadderValues, LadderPr
     default:
       return fail({
         part: "family",
-        found: `a ladder of family ${spec.family}: its nulls need resonant branches`,
+        found: `"${spec.family}", whose nulls need resonant branches`,
         allowed: "butterworth, chebyshev or bessel",
       });
   }

@@ -25,7 +25,7 @@ export interface PrototypeSpec {
   readonly stopDb?: number | undefined;
 }
 
-/** A problem that names the part of the `filter` stage it is about. */
+/** A problem with the part of the `filter` stage it is about; its text does not name the part again. */
 export interface FilterProblem extends Problem {
   readonly part: "order" | "ripple" | "stop" | "corner" | "low" | "high";
 }
@@ -42,29 +42,37 @@ const GREATEST_LOSS_DB = 1000;
 export function checkPrototype<S extends PrototypeSpec>(spec: S): Result<S, FilterProblem> {
   const problem =
     orderProblem(spec.order) ??
-    (hasRipple(spec.family) ? lossProblem("ripple", spec.rippleDb) : undefined) ??
-    (hasStop(spec.family) ? lossProblem("stop", spec.stopDb) : undefined) ??
+    (hasRipple(spec.family) ? lossProblem("ripple", spec.rippleDb, spec.family) : undefined) ??
+    (hasStop(spec.family) ? lossProblem("stop", spec.stopDb, spec.family) : undefined) ??
     (spec.family === "elliptic" ? ellipticProblem(spec) : undefined);
   return problem ? fail(problem) : ok(spec);
 }
 
 function orderProblem(order: number): FilterProblem | undefined {
   if (Number.isInteger(order) && order >= 1 && order <= HIGHEST_ORDER) return undefined;
-  return { part: "order", found: `order ${order}`, allowed: `a whole number from 1 to ${HIGHEST_ORDER}` };
+  return { part: "order", found: `${order}`, allowed: `a whole number from 1 to ${HIGHEST_ORDER}` };
 }
 
-function lossProblem(part: "ripple" | "stop", lossDb: number | undefined): FilterProblem | undefined {
-  const allowed = `more than 0 dB, from ${LEAST_LOSS_DB} to ${GREATEST_LOSS_DB} dB`;
-  if (lossDb === undefined) return { part, found: `no ${part}`, allowed };
+function lossProblem(
+  part: "ripple" | "stop",
+  lossDb: number | undefined,
+  family: FilterFamily,
+): FilterProblem | undefined {
+  const allowed = `from ${LEAST_LOSS_DB} to ${GREATEST_LOSS_DB} dB`;
+  if (lossDb === undefined) return { part, found: `it is missing, and ${family} needs it`, allowed };
   if (lossDb >= LEAST_LOSS_DB && lossDb <= GREATEST_LOSS_DB) return undefined;
-  return { part, found: `${part} ${lossDb} dB`, allowed };
+  return { part, found: `${lossDb} dB`, allowed };
 }
 
 function ellipticProblem(spec: PrototypeSpec): FilterProblem | undefined {
   const rippleDb = spec.rippleDb!;
   const stopDb = spec.stopDb!;
   if (stopDb <= rippleDb) {
-    return { part: "stop", found: `stop ${stopDb} dB`, allowed: `more than the ripple, ${rippleDb} dB` };
+    return {
+      part: "stop",
+      found: `${stopDb} dB is not above the ripple`,
+      allowed: `more than ${rippleDb} dB`,
+    };
   }
   const largest = largestEllipticOrder(rippleDb, stopDb, HIGHEST_ORDER);
   if (spec.order <= largest) return undefined;
@@ -72,12 +80,12 @@ function ellipticProblem(spec: PrototypeSpec): FilterProblem | undefined {
   if (largest === 0)
     return {
       part: "stop",
-      found: `stop ${stopDb} dB at ripple ${rippleDb} dB: ${reason}`,
+      found: `${stopDb} dB with a ripple of ${rippleDb} dB: ${reason}`,
       allowed: "a stop further above the ripple",
     };
   return {
     part: "order",
-    found: `order ${spec.order}: ${reason}`,
+    found: `${spec.order}: ${reason}`,
     allowed: `up to ${largest} with this ripple and stop`,
   };
 }

@@ -59,25 +59,28 @@ export function designRoots(spec: FilterSpec): Result<FilterRoots, FilterProblem
 export function checkFilter(spec: FilterSpec): Result<FilterSpec, FilterProblem> {
   const prototype = checkPrototype(spec);
   if (!prototype.ok) return prototype;
-  const problem = isBand(spec.shape) ? bandProblem(spec) : frequencyProblem("corner", spec.cornerHz);
+  const problem = isBand(spec.shape)
+    ? bandProblem(spec)
+    : frequencyProblem("corner", spec.cornerHz, spec.shape);
   return problem ? fail(problem) : ok(spec);
 }
 
 const isBand = (shape: FilterShape): boolean => shape === "bandpass" || shape === "bandstop";
 
-function bandProblem({ lowHz, highHz }: FilterSpec): FilterProblem | undefined {
-  const problem = frequencyProblem("low", lowHz) ?? frequencyProblem("high", highHz);
+function bandProblem({ shape, lowHz, highHz }: FilterSpec): FilterProblem | undefined {
+  const problem = frequencyProblem("low", lowHz, shape) ?? frequencyProblem("high", highHz, shape);
   if (problem || lowHz! < highHz!) return problem;
-  return { part: "high", found: `high ${highHz} Hz`, allowed: `a frequency above low, ${lowHz} Hz` };
+  return { part: "high", found: `${highHz} Hz is not above low`, allowed: `more than ${lowHz} Hz` };
 }
 
 function frequencyProblem(
   part: "corner" | "low" | "high",
   freqHz: number | undefined,
+  shape: FilterShape,
 ): FilterProblem | undefined {
   const allowed = "a frequency above 0 Hz";
-  if (freqHz === undefined) return { part, found: `no ${part}`, allowed };
-  return freqHz > 0 && Number.isFinite(freqHz) ? undefined : { part, found: `${part} ${freqHz} Hz`, allowed };
+  if (freqHz === undefined) return { part, found: `it is missing, and a ${shape} needs it`, allowed };
+  return freqHz > 0 && Number.isFinite(freqHz) ? undefined : { part, found: `${freqHz} Hz`, allowed };
 }
 
 type SectionTransform = (section: PrototypeSection) => readonly RatedSection[];

@@ -38,7 +38,7 @@ export function checkBranch({ R, L, C, joined }: BranchValues): (Problem & { par
   const count = [R, L, C].filter((part) => part !== undefined).length;
   if (count === 0) return { part: "R", found: "none of R, L, C is given", allowed: "at least one of them" };
   if (count > 1 && joined === undefined) {
-    return { part: "joined", found: "joined is missing", allowed: '"series" or "parallel"' };
+    return { part: "joined", found: "it is missing", allowed: '"series" or "parallel"' };
   }
   return undefined;
 }

@@ -99,7 +99,7 @@ describe("ladderValues(spec) refuses", () => {
       ok: false,
       problem: {
         part: "family",
-        found: `a ladder of family ${family}: its nulls need resonant branches`,
+        found: `"${family}", whose nulls need resonant branches`,
         allowed: "butterworth, chebyshev or bessel",
       },
     });

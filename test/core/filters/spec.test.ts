@@ -2,29 +2,34 @@ import { describe, expect, it } from "vitest";
 import { checkPrototype, type PrototypeSpec } from "../../../src/core/filters/spec.ts";
 import { checkFilter, designSections, type FilterSpec } from "../../../src/core/filters/transform.ts";
 
-const LOSS = "more than 0 dB, from 1e-9 to 1000 dB";
+const LOSS = "from 1e-9 to 1000 dB";
 
 describe("checkPrototype(spec) refuses", () => {
   it.each<[PrototypeSpec, string, string, string]>([
-    [{ family: "bessel", order: 0 }, "order", "order 0", "a whole number from 1 to 30"],
-    [{ family: "bessel", order: 31 }, "order", "order 31", "a whole number from 1 to 30"],
-    [{ family: "bessel", order: 2.5 }, "order", "order 2.5", "a whole number from 1 to 30"],
-    [{ family: "chebyshev", order: 3 }, "ripple", "no ripple", LOSS],
-    [{ family: "chebyshev", order: 3, rippleDb: 0 }, "ripple", "ripple 0 dB", LOSS],
-    [{ family: "chebyshev", order: 3, rippleDb: Number.NaN }, "ripple", "ripple NaN dB", LOSS],
-    [{ family: "inverse-chebyshev", order: 3 }, "stop", "no stop", LOSS],
-    [{ family: "inverse-chebyshev", order: 3, stopDb: -40 }, "stop", "stop -40 dB", LOSS],
+    [{ family: "bessel", order: 0 }, "order", "0", "a whole number from 1 to 30"],
+    [{ family: "bessel", order: 31 }, "order", "31", "a whole number from 1 to 30"],
+    [{ family: "bessel", order: 2.5 }, "order", "2.5", "a whole number from 1 to 30"],
+    [{ family: "chebyshev", order: 3 }, "ripple", "it is missing, and chebyshev needs it", LOSS],
+    [{ family: "chebyshev", order: 3, rippleDb: 0 }, "ripple", "0 dB", LOSS],
+    [{ family: "chebyshev", order: 3, rippleDb: Number.NaN }, "ripple", "NaN dB", LOSS],
+    [
+      { family: "inverse-chebyshev", order: 3 },
+      "stop",
+      "it is missing, and inverse-chebyshev needs it",
+      LOSS,
+    ],
+    [{ family: "inverse-chebyshev", order: 3, stopDb: -40 }, "stop", "-40 dB", LOSS],
     [
       { family: "elliptic", order: 3, rippleDb: 1, stopDb: 1 },
       "stop",
-      "stop 1 dB",
-      "more than the ripple, 1 dB",
+      "1 dB is not above the ripple",
+      "more than 1 dB",
     ],
     [
       { family: "elliptic", order: 3, rippleDb: 2, stopDb: 1 },
       "stop",
-      "stop 1 dB",
-      "more than the ripple, 2 dB",
+      "1 dB is not above the ripple",
+      "more than 2 dB",
     ],
   ])("%j", (spec, part, found, allowed) => {
     expect(checkPrototype(spec)).toEqual({
@@ -50,11 +55,26 @@ describe("checkPrototype(spec) refuses", () => {
 describe("checkFilter(spec) refuses", () => {
   const base = { family: "butterworth" as const, order: 2 };
   it.each<[FilterSpec, string, string, string]>([
-    [{ ...base, shape: "lowpass" }, "corner", "no corner", "a frequency above 0 Hz"],
-    [{ ...base, shape: "highpass", cornerHz: 0 }, "corner", "corner 0 Hz", "a frequency above 0 Hz"],
-    [{ ...base, shape: "bandpass", highHz: 2 }, "low", "no low", "a frequency above 0 Hz"],
-    [{ ...base, shape: "bandstop", lowHz: 2 }, "high", "no high", "a frequency above 0 Hz"],
-    [{ ...base, shape: "bandpass", lowHz: 2, highHz: 2 }, "high", "high 2 Hz", "a frequency above low, 2 Hz"],
+    [
+      { ...base, shape: "lowpass" },
+      "corner",
+      "it is missing, and a lowpass needs it",
+      "a frequency above 0 Hz",
+    ],
+    [{ ...base, shape: "highpass", cornerHz: 0 }, "corner", "0 Hz", "a frequency above 0 Hz"],
+    [
+      { ...base, shape: "bandpass", highHz: 2 },
+      "low",
+      "it is missing, and a bandpass needs it",
+      "a frequency above 0 Hz",
+    ],
+    [
+      { ...base, shape: "bandstop", lowHz: 2 },
+      "high",
+      "it is missing, and a bandstop needs it",
+      "a frequency above 0 Hz",
+    ],
+    [{ ...base, shape: "bandpass", lowHz: 2, highHz: 2 }, "high", "2 Hz is not above low", "more than 2 Hz"],
   ])("%j", (spec, part, found, allowed) => {
     expect(checkFilter(spec)).toEqual({ ok: false, problem: { part, found, allowed } });
     expect(designSections(spec)).toEqual(checkFilter(spec));

@@ -34,7 +34,7 @@ export const line = defineKind<LineValues>({
     loss > 0 && lossAt === undefined
       ? {
           part: "lossAt",
-          found: "lossAt is missing",
+          found: "it is missing",
           allowed: "the frequency at which the loss is given, as in 10M",
         }
       : undefined,

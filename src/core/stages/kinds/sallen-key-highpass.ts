@@ -27,7 +27,7 @@ export const sallenKeyHighpass = defineKind<SallenKeyValues>({
     capacitance("C2", "capacitor to the + input", { initial: "10n" }),
     resistance("R1", "resistor to the output", { initial: "11k" }),
     resistance("R2", "resistor to common", { initial: "22k" }),
-    optional(gainPart("gain", "gain K of the amplifier", { range: "positive", fallback: 1 })),
+    optional(gainPart("gain", "gain K of the amplifier", { fallback: 1 })),
     gbwPart,
   ],
   elements: ({ C1, C2, R1, R2, gain = 1, gbw }) => {

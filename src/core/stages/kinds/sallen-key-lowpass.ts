@@ -27,7 +27,7 @@ export const sallenKeyLowpass = defineKind<SallenKeyValues>({
     resistance("R2", "resistor to the + input", { initial: "10k" }),
     capacitance("C1", "capacitor to the output", { initial: "22n" }),
     capacitance("C2", "capacitor to common", { initial: "10n" }),
-    optional(gainPart("gain", "gain K of the amplifier", { range: "positive", fallback: 1 })),
+    optional(gainPart("gain", "gain K of the amplifier", { fallback: 1 })),
     gbwPart,
   ],
   elements: ({ R1, R2, C1, C2, gain = 1, gbw }) => {
