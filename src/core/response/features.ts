@@ -57,8 +57,8 @@ const MOST_CROSSINGS = 400;
 const known = new WeakMap<readonly GainPoint[], readonly Extreme[]>();
 
 /**
- * Local peaks, dips and nulls among the points, ascending, each refined on the chain's exact response; at most
- * `MOST_EXTREMES` of them.
+ * Local peaks, dips and nulls among the points, ascending, each to the last digits where the slope of the chain's
+ * exact response is zero; at most `MOST_EXTREMES` of them.
  */
 export function extremes(chain: Chain, points: readonly GainPoint[]): readonly Extreme[] {
   const found = known.get(points) ?? findExtremes(chain, points);
@@ -91,11 +91,19 @@ function refineDip(chain: Chain, before: GainPoint, here: GainPoint, after: Gain
 
 function refine(chain: Chain, before: GainPoint, after: GainPoint, what: "peak" | "dip"): Extreme {
   const sign = what === "peak" ? -1 : 1;
-  const gainAt = (logFreq: number) => readAt(chain, Math.exp(logFreq)).gainDb;
-  const freqHz = Math.exp(
-    findLeast((x) => sign * gainAt(x), Math.log(before.freqHz), Math.log(after.freqHz)),
-  );
-  return { freqHz, gainDb: readAt(chain, freqHz).gainDb, what };
+  const read = (logFreq: number) => readAt(chain, Math.exp(logFreq));
+  // At a null there is no slope: that is where a dip ends.
+  const slopeAt = (x: number) => sign * (read(x).slopeDbPerDecade || 0);
+  const [from, to] = inward(Math.log(before.freqHz), Math.log(after.freqHz));
+  const turns = slopeAt(from) < 0 && slopeAt(to) > 0;
+  const logFreq = turns ? findZero(slopeAt, from, to) : findLeast((x) => sign * read(x).gainDb, from, to);
+  return { freqHz: Math.exp(logFreq), gainDb: read(logFreq).gainDb, what };
+}
+
+/** A hair inside: either end may be a null, which has no slope. */
+function inward(from: number, to: number): readonly [number, number] {
+  const hair = 1e-6 * (to - from);
+  return [from + hair, to - hair];
 }
 
 /**
