@@ -23,7 +23,7 @@ import { closedForms } from "./closed-forms.ts";
 // rounding leaves of a sum of samples.
 const toleranceDb = 1e-9;
 const toleranceDeg = 1e-8;
-const freqsHz = Float64Array.of(11, 97, 310, 998, 1001, 3_700, 7_100, 9_999, 26_400, 61_234);
+const freqsHz = Float64Array.of(11, 97, 310, 998, 1001, 3_700, 7_100, 9_700, 26_400, 61_234);
 
 const atHz = (freqHz: number): Complex => complex(0, 2 * Math.PI * freqHz);
 
