@@ -18,8 +18,8 @@ Example:
   halfpower strain-bridge
       the strain bridge of pump 2`;
 
-export const STATUS = `Exit status: 0 done, 2 bad usage or input. Results go to standard output,
-messages to standard error.`;
+export const STATUS = `Exit status: 0 done (and limits met), 1 limits not met, 2 bad usage or input.
+Results go to standard output, messages to standard error.`;
 
 export const CAUTION = `Caution: the program models, it does not approve. Voltage and power ratings are
 not checked. A filter connected to the mains needs parts certified for it

@@ -14,5 +14,7 @@ export interface Output {
 export type Outcome = Result<Output, FileProblem>;
 
 export const DONE = 0;
+/** Limits not met. */
+export const NOT_MET = 1;
 /** Bad usage or input. */
 export const REFUSED = 2;

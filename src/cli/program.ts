@@ -1,5 +1,6 @@
 import { Command } from "commander";
 import manifest from "../../package.json" with { type: "json" };
+import { type CheckOptions, check } from "./commands/check.ts";
 import { read } from "./commands/read.ts";
 import { type SweepOptions, sweep } from "./commands/sweep.ts";
 import { ASCII_HELP, CAUTION, CHAIN_HELP, example, STATUS, SUMMARY, WITHOUT_COMMAND } from "./help.ts";
@@ -27,6 +28,7 @@ export function program(run: Run, write: (text: string) => void): Command {
     .action((chain: string | undefined) => run.settle(run.open(chain)));
   addRead(root, run);
   addSweep(root, run);
+  addCheck(root, run);
   const { presets } = run.session.io;
   if (presets !== undefined) addPresets(root, run, presets);
   return root;
@@ -93,4 +95,24 @@ function addSweep(root: Command, { session, settle }: Run): void {
       ),
     )
     .action((chain: string, options: SweepOptions) => settle(sweep(session, chain, options)));
+}
+
+function addCheck(root: Command, { session, settle }: Run): void {
+  root
+    .command("check")
+    .summary("each limit with margin and where")
+    .description(
+      "Checks each limit of a chain, and what folds into the converter's band, on the exact response: the worst " +
+        "value, where it is, and the margin. Exit status 1 where one is not met.",
+    )
+    .argument("<CHAIN>", CHAIN_HELP)
+    .option("--alias-loss <DB>", "wanted of what folds, instead of 6.02 bits + 1.76 dB")
+    .option("--json", "one JSON document")
+    .option("--csv", "CSV with a header")
+    .option("--ascii", ASCII_HELP)
+    .addHelpText(
+      "after",
+      example("halfpower check strain-bridge", "whether the strain bridge of pump 2 keeps its limits"),
+    )
+    .action((chain: string, options: CheckOptions) => settle(check(session, chain, options)));
 }

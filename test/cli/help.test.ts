@@ -17,6 +17,7 @@ describe("--help", () => {
     [[]],
     [["read"]],
     [["sweep"]],
+    [["check"]],
     [["presets"]],
     [["presets", "list"]],
     [["presets", "show"]],
