@@ -79,9 +79,12 @@ function shippedOf(folder: string, notes: Set<string>): ReadonlyMap<string, Ship
   return new Map();
 }
 
-/** `channel 2` before `channel 10`. */
-const { compare } = new Intl.Collator("en", { numeric: true });
-const byName = (one: OwnPreset, other: OwnPreset): number => compare(one.name, other.name);
+/** `channel 2` before `channel 10`. Made when it is wanted: the language data take longer to load than most commands. */
+let collator: Intl.Collator | undefined;
+function byName(one: OwnPreset, other: OwnPreset): number {
+  collator ??= new Intl.Collator("en", { numeric: true });
+  return collator.compare(one.name, other.name);
+}
 
 function ownEntry({ name, text }: OwnPreset): PresetEntry {
   return { ...(presetHead(text) ?? { type: "chain", title: "" }), name, origin: "own" };

@@ -3,7 +3,12 @@ import type { Charset } from "../core/units/format.ts";
 import { type Line, type Look, type Piece, piece } from "./paint.ts";
 
 const PLAIN = /^[ -~]*$/;
-const graphemes = new Intl.Segmenter();
+/** Made when it is wanted: most screens hold nothing that it is needed for. */
+let segmenter: Intl.Segmenter | undefined;
+function graphemesOf(text: string): Intl.Segments {
+  segmenter ??= new Intl.Segmenter();
+  return segmenter.segment(text);
+}
 
 /** Cells that a text takes up: two for wide characters, none for combining ones. */
 export const widthOf = (text: string): number => (PLAIN.test(text) ? text.length : stringWidth(text));
@@ -16,7 +21,7 @@ export function cut(text: string, columns: number, charset: Charset = "unicode")
   if (widthOf(text) <= columns) return text;
   let kept = "";
   let width = 0;
-  for (const { segment } of graphemes.segment(text)) {
+  for (const { segment } of graphemesOf(text)) {
     width += widthOf(segment);
     if (width > columns - 1) break;
     kept += segment;
@@ -74,7 +79,7 @@ function chunks(word: string, columns: number): readonly string[] {
   if (widthOf(word) <= columns) return [word];
   const parts: string[] = [];
   let part = "";
-  for (const { segment } of graphemes.segment(word)) {
+  for (const { segment } of graphemesOf(word)) {
     if (widthOf(part + segment) > columns && part !== "") {
       parts.push(part);
       part = "";
