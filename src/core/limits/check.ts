@@ -1,6 +1,6 @@
 import type { Chain } from "../chain.ts";
 import { readAt } from "../response/exact.ts";
-import { logSpaced, type Sweep } from "../response/grid.ts";
+import { decadesBetween, logSpaced, type Sweep } from "../response/grid.ts";
 import { marksOf } from "../response/marks.ts";
 import { unwrappedAt } from "../response/phase.ts";
 import { wrapDeg } from "../units/decibel.ts";
@@ -63,7 +63,7 @@ function measuredPhase(chain: Chain, freqsHz: readonly number[], sweep: Sweep): 
 
 /** Equal logarithmic steps and the chain's marks, both ends included; no frequency twice. */
 function searchGrid(chain: Chain, fromHz: number, toHz: number): readonly number[] {
-  const count = Math.max(5, Math.ceil(Math.log10(toHz / fromHz) * SEARCH_PER_DECADE) + 1);
+  const count = Math.max(5, Math.ceil(decadesBetween(fromHz, toHz) * SEARCH_PER_DECADE) + 1);
   const all = [...logSpaced(fromHz, toHz, count), ...marksOf(chain, fromHz, toHz)].sort((a, b) => a - b);
   return all.filter((freqHz, k) => freqHz !== all[k - 1]);
 }

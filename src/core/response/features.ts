@@ -1,7 +1,7 @@
 import { findLeast, findZero } from "../brent.ts";
 import type { Chain } from "../chain.ts";
 import { readAt } from "./exact.ts";
-import { logSpaced } from "./grid.ts";
+import { decadesBetween, logSpaced } from "./grid.ts";
 import { marksOf } from "./marks.ts";
 
 /** Points per decade of the search between the marks. */
@@ -24,7 +24,7 @@ export interface Extreme extends GainPoint {
  * every complex root. Ascending; where there is no value there is no point.
  */
 export function gainPoints(chain: Chain, fromHz: number, toHz: number): readonly GainPoint[] {
-  const count = Math.max(3, Math.ceil(Math.log10(toHz / fromHz) * SEARCH_PER_DECADE) + 1);
+  const count = Math.max(3, Math.ceil(decadesBetween(fromHz, toHz) * SEARCH_PER_DECADE) + 1);
   const freqsHz = [...logSpaced(fromHz, toHz, count), ...marksOf(chain, fromHz, toHz)].sort((a, b) => a - b);
   return apart(freqsHz)
     .map((freqHz) => ({ freqHz, gainDb: readAt(chain, freqHz).gainDb }))
@@ -109,21 +109,34 @@ function inward(from: number, to: number): readonly [number, number] {
 /**
  * Frequencies at which the gain passes a level (dB), ascending, to the last digits; at most `MOST_CROSSINGS`. Between
  * two points of the search the gain also turns at its extremes: those are looked at too, so that a pair of crossings
- * is not missed.
+ * is not missed. A gain that stays at the level, but for rounding, does not pass it; one that starts or ends there does.
  */
 export function crossings(chain: Chain, points: readonly GainPoint[], levelDb: number): readonly number[] {
   const turns = [...points, ...extremes(chain, points)].sort((a, b) => a.freqHz - b.freqHz);
   const found: number[] = [];
-  for (let k = 0; k + 1 < turns.length && found.length < MOST_CROSSINGS; k++) {
-    const [here, next] = [turns[k], turns[k + 1]];
-    if (here.gainDb === levelDb) found.push(here.freqHz);
-    else if (here.gainDb > levelDb !== next.gainDb > levelDb && next.gainDb !== levelDb) {
-      found.push(crossing(chain, here.freqHz, next.freqHz, levelDb));
-    }
+  let last: GainPoint | undefined;
+  for (const [k, here] of turns.entries()) {
+    const side = sideOf(here, levelDb);
+    if (side === 0 && isLoneEnd(turns, k, levelDb)) found.push(here.freqHz);
+    if (side === 0) continue;
+    if (last !== undefined && side !== sideOf(last, levelDb))
+      found.push(crossing(chain, last.freqHz, here.freqHz, levelDb));
+    if (found.length >= MOST_CROSSINGS) return found.slice(0, MOST_CROSSINGS);
+    last = here;
   }
-  const last = turns[turns.length - 1];
-  if (last?.gainDb === levelDb) found.push(last.freqHz);
   return found;
+}
+
+/** Above the level, below it, or at it but for rounding. */
+function sideOf({ gainDb }: GainPoint, levelDb: number): 1 | -1 | 0 {
+  if (Math.abs(gainDb - levelDb) <= LEAST_DEPTH_DB) return 0;
+  return gainDb > levelDb ? 1 : -1;
+}
+
+/** Whether the points start or end at the level, and leave it at once. */
+function isLoneEnd(turns: readonly GainPoint[], k: number, levelDb: number): boolean {
+  const neighbours = [turns[k - 1], turns[k + 1]].filter((turn) => turn !== undefined);
+  return neighbours.length === 1 && sideOf(neighbours[0], levelDb) !== 0;
 }
 
 /** A null has no finite level to interpolate with; it stands for one that is lower than any. */

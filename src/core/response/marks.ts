@@ -1,6 +1,7 @@
 import type { Chain } from "../chain.ts";
 import type { Complex } from "../complex.ts";
 import { chainRoots } from "../roots/groups.ts";
+import { middleHz } from "./grid.ts";
 
 /** So many frequencies at most are looked at beside the grid; those beside roots come first. */
 const MOST_MARKS = 6000;
@@ -17,7 +18,7 @@ const LEAST_RELATIVE_WIDTH = 1e-7;
  * images of sampled stages, breaks of measured ones.
  */
 export function marksOf(chain: Chain, fromHz: number, toHz: number): readonly number[] {
-  const omega0 = 2 * Math.PI * Math.sqrt(fromHz * toHz);
+  const omega0 = 2 * Math.PI * middleHz(fromHz, toHz);
   const { zeros, poles } = chainRoots(chain, omega0);
   const marks = [
     ...[...zeros, ...poles].flatMap(besideRoot),

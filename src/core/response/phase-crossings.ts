@@ -2,7 +2,7 @@ import { findZero } from "../brent.ts";
 import type { Chain } from "../chain.ts";
 import { wrapDeg } from "../units/decibel.ts";
 import { readAt } from "./exact.ts";
-import { logSpaced } from "./grid.ts";
+import { decadesBetween, logSpaced } from "./grid.ts";
 import { marksOf } from "./marks.ts";
 
 /** Points per decade of the search between the marks. */
@@ -21,7 +21,7 @@ export function phaseCrossings(
   phaseDeg: number,
   most = 200,
 ): readonly number[] {
-  const count = Math.max(3, Math.ceil(Math.log10(toHz / fromHz) * SEARCH_PER_DECADE) + 1);
+  const count = Math.max(3, Math.ceil(decadesBetween(fromHz, toHz) * SEARCH_PER_DECADE) + 1);
   const grid = [...logSpaced(fromHz, toHz, count), ...marksOf(chain, fromHz, toHz)].sort((a, b) => a - b);
   const offset = (freqHz: number) => wrapDeg(readAt(chain, freqHz).phaseDeg - phaseDeg);
   const found: number[] = [];

@@ -1,7 +1,7 @@
 import type { Chain } from "../chain.ts";
 import { wrapDeg } from "../units/decibel.ts";
 import { readAt } from "./exact.ts";
-import { logSpaced, type Sweep } from "./grid.ts";
+import { decadesBetween, logSpaced, middleHz, type Sweep } from "./grid.ts";
 import { marksOf } from "./marks.ts";
 import type { SampledResponse } from "./sampled.ts";
 
@@ -39,7 +39,7 @@ export function unwrappedAt(chain: Chain, sweep: Sweep, freqHz: readonly number[
   if (freqHz.length === 0) return [];
   const fromHz = Math.min(sweep.fromHz, freqHz[0]);
   const toHz = Math.max(sweep.fromHz, freqHz[freqHz.length - 1]);
-  const steps = Math.max(2, Math.ceil(Math.log10(toHz / fromHz) * WALK_PER_DECADE) + 1);
+  const steps = Math.max(2, Math.ceil(decadesBetween(fromHz, toHz) * WALK_PER_DECADE) + 1);
   const walk =
     toHz > fromHz ? [...logSpaced(fromHz, toHz, steps), ...marksOf(chain, fromHz, toHz)] : [fromHz];
   const stops = [...new Set([...walk, ...freqHz, sweep.fromHz])].sort((a, b) => a - b);
@@ -78,15 +78,17 @@ class PhaseTrack {
     const stepDeg = wrapDeg(toDeg - fromDeg - delayDeg);
     if (Math.abs(stepDeg) <= LARGEST_STEP_DEG) return stepDeg + delayDeg;
     if (toHz / fromHz < CLOSEST_RATIO) return this.#jump(fromHz, toHz, stepDeg) + delayDeg;
-    const middleHz = Math.sqrt(fromHz * toHz);
-    const middleDeg = readAt(this.#chain, middleHz).phaseDeg;
-    if (Number.isNaN(middleDeg)) return this.#jump(fromHz, toHz, stepDeg) + delayDeg;
-    return this.#step(fromHz, fromDeg, middleHz, middleDeg) + this.#step(middleHz, middleDeg, toHz, toDeg);
+    const betweenHz = middleHz(fromHz, toHz);
+    const betweenDeg = readAt(this.#chain, betweenHz).phaseDeg;
+    if (Number.isNaN(betweenDeg)) return this.#jump(fromHz, toHz, stepDeg) + delayDeg;
+    return (
+      this.#step(fromHz, fromDeg, betweenHz, betweenDeg) + this.#step(betweenHz, betweenDeg, toHz, toDeg)
+    );
   }
 
   /** A null on the axis turns the phase up by 180°, a pole there down: the limit of roots just left of the axis. */
   #jump(fromHz: number, toHz: number, stepDeg: number): number {
-    const rises = this.#gainDb(Math.sqrt(fromHz * toHz)) < this.#gainDb(fromHz * (1 - 1e-6));
+    const rises = this.#gainDb(middleHz(fromHz, toHz)) < this.#gainDb(fromHz * (1 - 1e-6));
     if (rises) return stepDeg < 0 ? stepDeg + 360 : stepDeg;
     return stepDeg > 0 ? stepDeg - 360 : stepDeg;
   }

@@ -4,8 +4,10 @@ import { levelDb } from "../../../src/core/dual.ts";
 import { shunt } from "../../../src/core/elements/make.ts";
 import { compile } from "../../../src/core/formula/evaluate.ts";
 import type { FormulaTree } from "../../../src/core/formula/tree.ts";
-import { readings } from "../../../src/core/readings.ts";
+import { readings, sweepReadings } from "../../../src/core/readings.ts";
 import { readAt } from "../../../src/core/response/exact.ts";
+import { logSpaced, sweepFrequencies } from "../../../src/core/response/grid.ts";
+import { landmarks } from "../../../src/core/response/landmarks.ts";
 import { Sampler } from "../../../src/core/response/sampled.ts";
 import { buildStage } from "../../../src/core/stages/build.ts";
 import type { PartValues } from "../../../src/core/stages/kind.ts";
@@ -144,5 +146,26 @@ describe("the sampled response beyond a double", () => {
       expect(Math.abs(gainDb[k] - exact.gainDb)).toBeLessThan(1e-9 * Math.abs(exact.gainDb));
       expect(phaseDeg[k]).toBeCloseTo(exact.phaseDeg, 6);
     });
+  });
+});
+
+describe("frequencies whose ratio is beyond a double", () => {
+  const sweep = { fromHz: 1e-310, toHz: 1e307, perDecade: 4 };
+
+  it("are spaced evenly all the same", () => {
+    const freqHz = sweepFrequencies(sweep);
+    expect(freqHz).toHaveLength(617 * 4 + 1);
+    for (const [k, freq] of freqHz.entries()) expect(Math.log10(freq)).toBeCloseTo(-310 + k / 4, 9);
+    expect([...logSpaced(1e-310, 1e307, 3)].map((freq) => Math.log10(freq))[1]).toBeCloseTo(-1.5, 9);
+  });
+
+  it("are read, swept and searched", () => {
+    const chain = chainOf(rc);
+    const found = readings(chain, sweep, [1e-310, 1e307]).readings;
+    expect(found.map(({ gainDb }) => gainDb)).toEqual([0, readAt(chain, 1e307).gainDb]);
+    expect(found[1].phaseUnwrappedDeg).toBeCloseTo(-90, 9);
+    expect(sweepReadings(chain, sweep).readings).toHaveLength(617 * 4 + 1);
+    // Half power at 1/(2πRC), and nothing else of note.
+    expect(landmarks(chain, sweep.fromHz, sweep.toHz).map(({ what }) => what)).toEqual(["half power"]);
   });
 });

@@ -90,3 +90,29 @@ describe("landmarks(chain, fromHz, toHz)", () => {
     });
   });
 });
+
+describe("crossings(chain, points, levelDb)", () => {
+  const unity = chainOf(["gain", { gain: 1 }]);
+  const falling = chainOf(["integrator", { f0: 1000 }]);
+
+  it("has none where the gain stays at the level", () => {
+    expect(crossings(unity, gainPoints(unity, 1, 1e6), 0)).toEqual([]);
+    expect(landmarks(unity, 1, 1e6)).toEqual([]);
+    // 0 dB but for rounding up to about 10 Hz, then falling: 1/√(1 + x²).
+    const lowpass = chainOf(["lowpass-1", { f0: 1e9 }]);
+    expect(crossings(lowpass, gainPoints(lowpass, 1, 1e9), 0)).toEqual([]);
+  });
+
+  it("has one where the gain starts or ends at the level", () => {
+    // 1/x is 0 dB at its corner.
+    expect(crossings(falling, gainPoints(falling, 1000, 1e5), 0)).toEqual([1000]);
+    expect(crossings(falling, gainPoints(falling, 10, 1000), 0)).toEqual([1000]);
+    expect(crossings(falling, gainPoints(falling, 10, 1e5), 0)[0]).toBeCloseTo(1000, 9);
+  });
+
+  it("has none where the gain only touches the level", () => {
+    // x/Q over 1 + x/Q + x² is 1 at its centre, and less beside it.
+    const band = chainOf(["bandpass-2", { f0: 1000, Q: 3 }]);
+    expect(crossings(band, gainPoints(band, 10, 1e5), 0)).toEqual([]);
+  });
+});
