@@ -100,6 +100,20 @@ describe("readings(chain, sweep, freqsHz, rateHz)", () => {
     });
   });
 
+  it("tells the share of the source at a null across the line, and that of the trap as its limit", () => {
+    // 1 H and 1 F in series are a short at 1 rad/s: nothing is left of the EMF, and nothing more is lost by the trap.
+    const trap = makeChain({
+      source: branchImpedance({ R: 50, joined: "series" }),
+      stages: [stage("shunt", { L: 1, C: 1, joined: "series" })],
+    });
+    const [reading] = readings(trap, sweep, [1 / (2 * Math.PI)]).readings;
+    expect(reading).toMatchObject({ gainDb: null, ratio: 0 });
+    expect(reading.shares).toEqual([
+      { name: "source", gainDb: null },
+      { name: "shunt", gainDb: 0 },
+    ]);
+  });
+
   it("counts the continuous phase from the wrapped phase at the start of the sweep", () => {
     // e^(−s·1 ms): −0.36° per Hz. From 700 Hz on, where it is −252° and so +108° wrapped.
     const late = makeChain({ stages: [stage("delay", { time: 1e-3 })] });

@@ -36,7 +36,11 @@ export function readAt(chain: Chain, freqHz: number): Reading {
   const here = readStrictly(chain, freqHz);
   if (!Number.isNaN(here.gainDb) && !here.shares.some((share) => Number.isNaN(share.gainDb))) return here;
   const beside = readStrictly(chain, freqHz * (1 + LIMIT_STEP));
-  return { ...beside, freqHz, ...(Number.isNaN(here.gainDb) ? {} : { ...here, shares: beside.shares }) };
+  if (Number.isNaN(here.gainDb)) return { ...beside, freqHz };
+  return {
+    ...here,
+    shares: here.shares.map((share, k) => (Number.isNaN(share.gainDb) ? beside.shares[k] : share)),
+  };
 }
 
 /** Far above rounding, far below any bandwidth. */
