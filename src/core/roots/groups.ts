@@ -75,6 +75,8 @@ function carryPolynomials(
         }
       }
       const input = element.inputAdmittance && inScale(element.inputAdmittance, omega0);
+      // One volt at the input is `den` of the pair: the same factor stands above, and cancels behind an ideal source.
+      if (input !== undefined) roots.zeros.push(...rootsOf(input.den, omega0));
       return input === undefined ? { v: [1], i: [0] } : { v: input.den, i: input.num };
     }
   }
