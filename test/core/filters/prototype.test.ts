@@ -96,6 +96,16 @@ describe("lowpassPrototype({family: 'chebyshev'})", () => {
     }
   });
 
+  it("is at half power where the table says, below the peak and below DC", () => {
+    for (const row of rowsOf("chebyshev_sections")) {
+      const prototype = design({ family: "chebyshev", order: row.n, rippleDb: row.ripple_db });
+      const levelDb = (x: number) => 10 * Math.log10(rootsPower(prototype, x));
+      const half = 10 * Math.log10(1 / 2);
+      expect(levelDb(row.w3db_below_peak_over_ripple_edge)).toBeCloseTo(half, 6);
+      expect(levelDb(row.w3db_below_dc_over_ripple_edge)).toBeCloseTo(levelDb(0) + half, 6);
+    }
+  });
+
   it("starts at −ripple for even order and at 0 dB for odd order", () => {
     expect(rootsPower(design({ family: "chebyshev", order: 4, rippleDb: 1 }), 0)).toBeCloseTo(10 ** -0.1, 12);
     expect(rootsPower(design({ family: "chebyshev", order: 5, rippleDb: 1 }), 0)).toBeCloseTo(1, 12);
@@ -144,4 +154,15 @@ describe("lowpassPrototype({family: 'elliptic'})", () => {
       }
     });
   }
+});
+
+it("has every row of prototypes.json", () => {
+  const counts = (kind: string) => rowsOf(kind).length;
+  expect(counts("butterworth_sections")).toBe(7);
+  expect(counts("bessel")).toBe(6);
+  expect(counts("chebyshev_sections")).toBe(40);
+  expect(counts("elliptic_scipy")).toBe(10);
+  expect(counts("butterworth_g")).toBe(10);
+  expect(counts("chebyshev_g")).toBe(36);
+  expect(rows).toHaveLength(109);
 });
