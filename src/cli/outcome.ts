@@ -7,6 +7,8 @@ export interface Output {
   readonly text: string;
   /** Lines for standard error. */
   readonly notes?: readonly string[];
+  /** A table beside the result, for standard error as it stands, the last line ended. */
+  readonly aside?: string;
   /** 0 unless said otherwise. */
   readonly exitCode?: number;
 }

@@ -1,6 +1,7 @@
 import { Command } from "commander";
 import manifest from "../../package.json" with { type: "json" };
 import { type CheckOptions, check } from "./commands/check.ts";
+import { type DesignOptions, design } from "./commands/design.ts";
 import { read } from "./commands/read.ts";
 import { type SweepOptions, sweep } from "./commands/sweep.ts";
 import { ASCII_HELP, CAUTION, CHAIN_HELP, example, STATUS, SUMMARY, WITHOUT_COMMAND } from "./help.ts";
@@ -29,6 +30,7 @@ export function program(run: Run, write: (text: string) => void): Command {
   addRead(root, run);
   addSweep(root, run);
   addCheck(root, run);
+  addDesign(root, run);
   const { presets } = run.session.io;
   if (presets !== undefined) addPresets(root, run, presets);
   return root;
@@ -115,4 +117,34 @@ function addCheck(root: Command, { session, settle }: Run): void {
       example("halfpower check strain-bridge", "whether the strain bridge of pump 2 keeps its limits"),
     )
     .action((chain: string, options: CheckOptions) => settle(check(session, chain, options)));
+}
+
+function addDesign(root: Command, { session, settle }: Run): void {
+  root
+    .command("design")
+    .summary("a filter from what it has to do")
+    .description(
+      "Designs the low-pass filter of least order that loses no more than the pass loss up to the pass edge and no " +
+        "less than the stop loss from the stop edge on. Writes a chain file, with --as made of real parts; the " +
+        "families side by side go to standard error.",
+    )
+    .option("--pass <FREQ>", "pass edge")
+    .option("--pass-loss <DB>", "most that is lost up to the pass edge")
+    .option("--stop <FREQ>", "stop edge")
+    .option("--stop-loss <DB>", "least that is lost from the stop edge on")
+    .option("--family <NAME>", "butterworth (default), chebyshev, inverse-chebyshev, bessel or elliptic")
+    .option("--as <CIRCUIT>", "made of real parts: sallen-key, mfb or ladder")
+    .option("--series <E>", "E series of resistors, and of a ladder's parts; E96 by default")
+    .option("--capacitors <E>", "E series of capacitors; E12 by default")
+    .option("--resistance <R>", "impedance level; 10 kohm, or 50 ohm for a ladder")
+    .option("--gbw <FREQ>", "gain-bandwidth product of the op amps; ideal ones without it")
+    .option("--ascii", ASCII_HELP)
+    .addHelpText(
+      "after",
+      example(
+        "halfpower design --pass 1k --pass-loss 1 --stop 9k --stop-loss 60 --as mfb",
+        "an anti-alias filter of real parts for a pump channel",
+      ),
+    )
+    .action((options: DesignOptions) => settle(design(session, options)));
 }

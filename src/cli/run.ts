@@ -89,7 +89,8 @@ async function deliver(outcome: Outcome, { io, charset }: Session): Promise<numb
     await tell(fileProblemText(outcome.problem));
     return REFUSED;
   }
-  const { text, notes = [], exitCode = DONE } = outcome.value;
+  const { text, notes = [], aside = "", exitCode = DONE } = outcome.value;
+  if (aside !== "") await io.stderr.write(asciiIf(aside, charset));
   for (const note of notes) await tell(note);
   if (text !== "") await io.stdout.write(asciiIf(text, charset));
   return exitCode;

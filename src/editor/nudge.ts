@@ -1,7 +1,7 @@
 import { SERIES_NAMES, type SeriesName, stepInSeries } from "../core/units/e-series.ts";
-import { formatExact } from "../core/units/format.ts";
 import { parseQuantity } from "../core/units/quantity.ts";
-import { UNITS, type UnitTag } from "../core/units/unit.ts";
+import { shortValue } from "../core/units/short-value.ts";
+import type { UnitTag } from "../core/units/unit.ts";
 import type { RawValue } from "../document/types.ts";
 import type { Field } from "./rows.ts";
 
@@ -36,9 +36,9 @@ export function nudged(field: Field, nudge: NudgeStep, direction: "up" | "down")
   if (field.whole) return value.value + sign;
   const inDb = field.unit === "gain" && typeof raw === "string" && /dB\s*$/.test(raw);
   if (inDb) return `${rounded(20 * Math.log10(value.value) + sign)} dB`;
-  if (isOnLinearScale(field.unit)) return written(rounded(value.value + sign), field.unit);
+  if (isOnLinearScale(field.unit)) return shortValue(rounded(value.value + sign), field.unit);
   const next = onSeries(value.value, nudge, direction);
-  return next === undefined ? undefined : written(next, field.unit);
+  return next === undefined ? undefined : shortValue(next, field.unit);
 }
 
 /** Levels, angles and temperatures go by ones: they pass through zero. */
@@ -59,14 +59,6 @@ function onSeries(value: number, nudge: NudgeStep, direction: "up" | "down"): nu
 
 /** Six digits are more than any part has. */
 const rounded = (value: number): number => Number(value.toPrecision(6));
-
-/** Short, as an engineer writes it: `4.7k`, `100n`. */
-function written(value: number, unit: UnitTag): string {
-  const text = formatExact(value, unit, "ascii");
-  const symbol = UNITS[unit].ascii;
-  if (symbol === "" || unit === "level" || !text.endsWith(symbol)) return text;
-  return text.slice(0, -symbol.length).replace(" ", "");
-}
 
 function neighbour({ choices = [], raw, fallback }: Field, direction: "up" | "down"): string | undefined {
   const now = choices.indexOf(String(raw ?? fallback ?? choices[0]));

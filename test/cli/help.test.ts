@@ -18,6 +18,7 @@ describe("--help", () => {
     [["read"]],
     [["sweep"]],
     [["check"]],
+    [["design"]],
     [["presets"]],
     [["presets", "list"]],
     [["presets", "show"]],

@@ -25,12 +25,18 @@ export function checkLimit(chain: Chain, limit: Limit, sweep: Sweep): Verdict {
   }
   const near = samples.findLastIndex(({ freqHz }) => freqHz <= worst.freqHz);
   return {
-    pass: worst.value >= 0,
+    pass: worst.value >= -roundingOf(limit),
     worstFreqHz: worst.freqHz,
     worstValue: at(worst.freqHz, near),
     margin: worst.value,
   };
 }
+
+/** A bound that is met exactly is met: a design lies right on its pass edge. In dB and degrees, or of the bound in s. */
+const ROUNDING = 1e-9;
+
+const roundingOf = ({ quantity, atLeast = 0, atMost = 0 }: Limit): number =>
+  quantity === "delay" ? ROUNDING * Math.max(Math.abs(atLeast), Math.abs(atMost)) : ROUNDING;
 
 interface Measured {
   /** The limit's quantity at a frequency between the samples beside the one numbered `near`. */
