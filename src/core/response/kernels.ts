@@ -1,4 +1,5 @@
-import type { BranchCoefficients, ComplexArray } from "./samples.ts";
+import type { ComplexArray } from "./sample-rational.ts";
+import type { BranchCoefficients, MatrixSamples } from "./samples.ts";
 
 /**
  * The inner loops over a grid of frequencies. Real and imaginary parts lie in arrays of their own and coefficients in
@@ -10,8 +11,7 @@ export function addRising(
   sum: ComplexArray,
   by: ComplexArray,
   omega: Float64Array,
-  real: number,
-  rising: number,
+  { real, rising }: BranchCoefficients,
 ): void {
   const { re: sr, im: si } = sum;
   const { re: br, im: bi } = by;
@@ -85,6 +85,27 @@ export function addProduct(sum: ComplexArray, p: ComplexArray, q: ComplexArray):
   }
 }
 
+/** `v, i = a·v + b·i, c·v + d·i` */
+export function carryMatrix(v: ComplexArray, i: ComplexArray, { a, b, c, d }: MatrixSamples): void {
+  const { re: vr, im: vi } = v;
+  const { re: ir, im: ii } = i;
+  const { re: ar, im: ai } = a;
+  const { re: br, im: bi } = b;
+  const { re: cr, im: ci } = c;
+  const { re: dr, im: di } = d;
+  const count = vr.length;
+  for (let k = 0; k < count; k++) {
+    const p = vr[k];
+    const q = vi[k];
+    const s = ir[k];
+    const t = ii[k];
+    vr[k] = ar[k] * p - ai[k] * q + br[k] * s - bi[k] * t;
+    vi[k] = ar[k] * q + ai[k] * p + br[k] * t + bi[k] * s;
+    ir[k] = cr[k] * p - ci[k] * q + dr[k] * s - di[k] * t;
+    ii[k] = cr[k] * q + ci[k] * p + dr[k] * t + di[k] * s;
+  }
+}
+
 /** `product *= factor` */
 export function multiplyBy(product: ComplexArray, factor: ComplexArray): void {
   const { re, im } = product;
@@ -116,38 +137,29 @@ export function divideBy(quotient: ComplexArray, divisor: ComplexArray): void {
   }
 }
 
-/** Whether every value lies between the bounds in size (squared sum), zero excepted. */
-export function inRange(p: ComplexArray, q: ComplexArray, low: number, high: number): boolean {
-  const { re: pr, im: pi } = p;
-  const { re: qr, im: qi } = q;
-  const count = pr.length;
-  let least = Infinity;
-  let most = 0;
-  for (let k = 0; k < count; k++) {
-    const size = pr[k] * pr[k] + pi[k] * pi[k] + qr[k] * qr[k] + qi[k] * qi[k];
-    least = Math.min(least, size);
-    most = Math.max(most, size);
-  }
-  return least >= low && most <= high;
-}
-
 const DB_PER_DOUBLING = 20 * Math.log10(2);
 const DB_PER_NEPER_OF_POWER = 10 / Math.LN10;
 const DEGREES = 180 / Math.PI;
 
-/** Gain in dB and phase in (−180, 180] of `(re + j·im)·2^exponent`. */
+/** Gain in dB and phase in (−180, 180] of `n/v·2^exponent`, both within the range that `keepInRange` keeps. */
 export function polar(
-  { re, im }: ComplexArray,
+  n: ComplexArray,
+  v: ComplexArray,
   exponent: Int32Array,
   gainDb: Float64Array,
   phaseDeg: Float64Array,
 ): void {
-  const count = re.length;
+  const { re: nr, im: ni } = n;
+  const { re: vr, im: vi } = v;
+  const count = nr.length;
   for (let k = 0; k < count; k++) {
-    const a = re[k];
-    const b = im[k];
-    gainDb[k] = DB_PER_NEPER_OF_POWER * Math.log(a * a + b * b) + DB_PER_DOUBLING * exponent[k];
-    const angle = Math.atan2(b, a) * DEGREES;
+    const a = nr[k];
+    const b = ni[k];
+    const c = vr[k];
+    const d = vi[k];
+    const power = (a * a + b * b) / (c * c + d * d);
+    gainDb[k] = DB_PER_NEPER_OF_POWER * Math.log(power) + DB_PER_DOUBLING * exponent[k];
+    const angle = Math.atan2(b * c - a * d, a * c + b * d) * DEGREES;
     phaseDeg[k] = angle <= -180 ? 180 : angle;
   }
 }

@@ -1,101 +1,91 @@
 import { plain } from "../dual.ts";
 import type { DistributedElement, Element, IsolatingElement, LumpedElement } from "../elements/element.ts";
 import type { Polynomial, Rational } from "../rational.ts";
-import { divideBy, multiplyBy } from "./kernels.ts";
-
-/** Complex values over a grid of frequencies, real and imaginary parts apart. */
-export interface ComplexArray {
-  readonly re: Float64Array;
-  readonly im: Float64Array;
-}
+import { multiplyBy } from "./kernels.ts";
+import { type ComplexArray, constant, empty, samplePolynomial, sampleRational } from "./sample-rational.ts";
 
 /**
  * An element over a grid, classed by what it does to the pair (V, I), so that each class has a loop of its own.
  * Branches are so cheap that their three coefficients are kept instead of samples.
  */
 export type ElementSamples =
-  /** `V += Z·I` with Z known by resistance and reactance, or `V += I/Y` with Y by conductance and susceptance. */
-  | { readonly form: "series"; readonly branch: BranchCoefficients }
-  /** `I += Y·V`, or `I += V/Z`. */
-  | { readonly form: "shunt"; readonly branch: BranchCoefficients }
-  /** Starts afresh with one volt. */
-  | {
-      readonly form: "isolating";
-      readonly transfer: ComplexArray;
-      readonly inputAdmittance: ComplexArray | undefined;
-      readonly outputImpedance: ComplexArray | undefined;
-    }
-  | {
-      readonly form: "matrix";
-      readonly n: ComplexArray;
-      readonly a: ComplexArray;
-      readonly b: ComplexArray;
-      readonly c: ComplexArray;
-      readonly d: ComplexArray;
-    };
+  /** `V += Z·I` */
+  | { readonly form: "series"; readonly by: BranchCoefficients | ComplexArray }
+  /** `I += Y·V` */
+  | { readonly form: "shunt"; readonly by: BranchCoefficients | ComplexArray }
+  /** No current flows from its output back to its input: `I = 0`. */
+  | { readonly form: "isolating"; readonly transfer: ComplexArray }
+  | MatrixSamples;
+
+export interface MatrixSamples {
+  readonly form: "matrix";
+  readonly n: ComplexArray;
+  readonly a: ComplexArray;
+  readonly b: ComplexArray;
+  readonly c: ComplexArray;
+  readonly d: ComplexArray;
+}
 
 /**
- * `real + j(ω·rising − falling/ω)`: an impedance (R, L, 1/C) when `is` says so, else an admittance (G, C, 1/L).
+ * `real + j(ω·rising − falling/ω)`: an impedance (R, L, 1/C) in series or an admittance (G, C, 1/L) in shunt, or where
+ * `inverted` says so the one over it.
  */
 export interface BranchCoefficients {
-  readonly is: "impedance" | "admittance";
+  readonly inverted: boolean;
   readonly real: number;
   readonly rising: number;
   readonly falling: number;
 }
 
-/** Samples one element over angular frequencies in rad/s. */
-export function sampleElement(element: Element, omega: Float64Array): ElementSamples {
+/** Samples one element over angular frequencies in rad/s; an isolating stage is parted from its ports. */
+export function sampleElement(element: Element, omega: Float64Array): readonly ElementSamples[] {
   switch (element.form) {
     case "series":
-      return sampleSeries(element.impedance, omega);
+      return [sampleSeries(element.impedance, omega)];
     case "shunt":
-      return sampleShunt(element.impedance, omega);
+      return [sampleShunt(element.impedance, omega)];
     case "lumped":
-      return sampleLumped(element, omega);
+      return [sampleLumped(element, omega)];
     case "distributed":
-      return sampleLine(element, omega);
+      return [sampleLine(element, omega)];
     case "isolating":
       return sampleIsolating(element, omega);
   }
 }
 
-function sampleSeries(impedance: Rational, omega: Float64Array): ElementSamples {
-  const branch = branchCoefficients(impedance);
-  if (branch !== undefined && (branch.is === "impedance" || branch.real > 0))
-    return { form: "series", branch };
-  const { num, den } = sampleBoth(impedance, omega);
-  return { form: "matrix", n: den, a: den, b: num, c: constant(0, omega.length), d: den };
+function sampleSeries({ num, den, omega0 }: Rational, omega: Float64Array): ElementSamples {
+  const by = branchCoefficients(num, den, omega0);
+  if (by !== undefined) return { form: "series", by };
+  const [b, d] = [samplePolynomial(num, omega0, omega), samplePolynomial(den, omega0, omega)];
+  return { form: "matrix", n: d, a: d, b, c: constant(0, omega.length), d };
 }
 
-function sampleShunt(impedance: Rational, omega: Float64Array): ElementSamples {
-  const branch = branchCoefficients(impedance);
-  if (branch !== undefined && (branch.is === "admittance" || branch.real > 0))
-    return { form: "shunt", branch };
-  const { num, den } = sampleBoth(impedance, omega);
-  return { form: "matrix", n: num, a: num, b: constant(0, omega.length), c: den, d: num };
+function sampleShunt({ num, den, omega0 }: Rational, omega: Float64Array): ElementSamples {
+  const by = branchCoefficients(den, num, omega0);
+  if (by !== undefined) return { form: "shunt", by };
+  const [a, c] = [samplePolynomial(num, omega0, omega), samplePolynomial(den, omega0, omega)];
+  return { form: "matrix", n: a, a, b: constant(0, omega.length), c, d: a };
 }
 
-/** Coefficients of a branch of R, L, C; undefined for a short in parallel and for what is no such branch. */
-function branchCoefficients({ num, den, omega0 }: Rational): BranchCoefficients | undefined {
+/**
+ * Coefficients of `p/q` where it is a branch of R, L, C, as it stands or else inverted; undefined for what is no such
+ * branch, and where it is infinite at a resonance without loss.
+ */
+function branchCoefficients(p: Polynomial, q: Polynomial, omega0: number): BranchCoefficients | undefined {
   if (omega0 !== 1) return undefined;
-  const impedance = overMonomial(num, den);
-  if (impedance !== undefined) return { is: "impedance", ...impedance };
-  const admittance = overMonomial(den, num);
-  return admittance === undefined ? undefined : { is: "admittance", ...admittance };
+  const direct = overMonomial(p, q);
+  if (direct !== undefined) return { inverted: false, ...direct };
+  const inverse = overMonomial(q, p);
+  return inverse !== undefined && inverse.real > 0 ? { inverted: true, ...inverse } : undefined;
 }
 
 /** `p/q` as constant, rising and falling term, where q is a single power of s and no other power comes out. */
-function overMonomial(p: Polynomial, q: Polynomial): Omit<BranchCoefficients, "is"> | undefined {
+function overMonomial(p: Polynomial, q: Polynomial): Omit<BranchCoefficients, "inverted"> | undefined {
   const power = q.length - 1;
   if (power > 1 || q[power] === 0 || (power === 1 && q[0] !== 0)) return undefined;
   const term = (k: number) => (p[k + power] ?? 0) / q[power];
   if (p.length > power + 2) return undefined;
   return { real: term(0), rising: term(1), falling: power === 1 ? p[0] / q[1] : 0 };
-}
-
-function sampleBoth({ num, den, omega0 }: Rational, omega: Float64Array) {
-  return { num: samplePolynomial(num, omega0, omega), den: samplePolynomial(den, omega0, omega) };
 }
 
 function sampleLumped({ n, a, b, c, d, omega0 }: LumpedElement, omega: Float64Array): ElementSamples {
@@ -123,15 +113,18 @@ function sampleLine(line: DistributedElement, omega: Float64Array): ElementSampl
   return { form: "matrix", n, a, b, c, d: a };
 }
 
-function sampleIsolating(element: IsolatingElement, omega: Float64Array): ElementSamples {
-  const sample = (f: Rational | undefined) => (f === undefined ? undefined : sampleRational(f, omega));
-  return {
-    form: "isolating",
-    transfer: sampleTransfer(element.transfer, omega),
-    inputAdmittance: sample(element.inputAdmittance),
-    outputImpedance: sample(element.outputImpedance),
-  };
+/** From its input to its output: what it draws, its transfer, what it stands behind. */
+function sampleIsolating(element: IsolatingElement, omega: Float64Array): readonly ElementSamples[] {
+  const { inputAdmittance, outputImpedance } = element;
+  return [
+    ...(inputAdmittance ? [{ form: "shunt" as const, by: samplePort(inputAdmittance, omega) }] : []),
+    { form: "isolating", transfer: sampleTransfer(element.transfer, omega) },
+    ...(outputImpedance ? [{ form: "series" as const, by: samplePort(outputImpedance, omega) }] : []),
+  ];
 }
+
+const samplePort = (port: Rational, omega: Float64Array): BranchCoefficients | ComplexArray =>
+  branchCoefficients(port.num, port.den, port.omega0) ?? sampleRational(port, omega);
 
 function sampleTransfer(transfer: IsolatingElement["transfer"], omega: Float64Array): ComplexArray {
   if (transfer.type === "irrational") {
@@ -143,78 +136,4 @@ function sampleTransfer(transfer: IsolatingElement["transfer"], omega: Float64Ar
   const out = first === undefined ? constant(1, omega.length) : sampleRational(first, omega);
   for (const section of others) multiplyBy(out, sampleRational(section, omega));
   return out;
-}
-
-/** `num/den` over the grid; up to the second degree the coefficients are held in locals. */
-export function sampleRational({ num, den, omega0 }: Rational, omega: Float64Array): ComplexArray {
-  if (den.length === 1) return samplePolynomial(num, omega0, omega, 1 / den[0]);
-  if (num.length <= 3 && den.length <= 3) return sampleQuadratics(num, den, omega0, omega);
-  const out = samplePolynomial(num, omega0, omega);
-  divideBy(out, samplePolynomial(den, omega0, omega));
-  return out;
-}
-
-function sampleQuadratics(
-  num: Polynomial,
-  den: Polynomial,
-  omega0: number,
-  omega: Float64Array,
-): ComplexArray {
-  const out = empty(omega.length);
-  const { re, im } = out;
-  const [n0, n1 = 0, n2 = 0] = num;
-  const [d0, d1 = 0, d2 = 0] = den;
-  const inverse = 1 / omega0;
-  for (let k = 0; k < omega.length; k++) {
-    const x = omega[k] * inverse;
-    const xx = x * x;
-    const nr = n0 - n2 * xx;
-    const ni = n1 * x;
-    const dr = d0 - d2 * xx;
-    const di = d1 * x;
-    const size = 1 / (dr * dr + di * di);
-    re[k] = (nr * dr + ni * di) * size;
-    im[k] = (ni * dr - nr * di) * size;
-  }
-  return out;
-}
-
-/** A polynomial of `jω/omega0`, times a factor, over the grid: even powers are real, odd ones imaginary. */
-export function samplePolynomial(
-  p: Polynomial,
-  omega0: number,
-  omega: Float64Array,
-  factor = 1,
-): ComplexArray {
-  if (p.length === 1) return constant(p[0] * factor, omega.length);
-  const out = empty(omega.length);
-  const even = signed(p, 0, factor);
-  const odd = signed(p, 1, factor);
-  const inverse = 1 / omega0;
-  for (let k = 0; k < omega.length; k++) {
-    const x = omega[k] * inverse;
-    const xx = x * x;
-    let real = 0;
-    for (let j = even.length - 1; j >= 0; j--) real = real * xx + even[j];
-    let imaginary = 0;
-    for (let j = odd.length - 1; j >= 0; j--) imaginary = imaginary * xx + odd[j];
-    out.re[k] = real;
-    out.im[k] = imaginary * x;
-  }
-  return out;
-}
-
-/** Every second coefficient with the sign that `j^k` gives it. */
-function signed(p: Polynomial, parity: 0 | 1, factor: number): number[] {
-  return p
-    .filter((_, power) => power % 2 === parity)
-    .map((coefficient, k) => coefficient * factor * (k % 2 === 0 ? 1 : -1));
-}
-
-export function empty(length: number): ComplexArray {
-  return { re: new Float64Array(length), im: new Float64Array(length) };
-}
-
-export function constant(value: number, length: number): ComplexArray {
-  return { re: new Float64Array(length).fill(value), im: new Float64Array(length) };
 }
