@@ -1,6 +1,7 @@
-import { mkdtempSync, writeFileSync } from "node:fs";
+import { mkdtempSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
+import { afterAll } from "vitest";
 import type { CliIo } from "../../src/cli/io.ts";
 import type { PresetStore } from "../../src/cli/preset-store.ts";
 import { runCli } from "../../src/cli/run.ts";
@@ -17,7 +18,18 @@ export interface RunSettings {
   readonly presets?: PresetStore;
 }
 
-export const folder = (): string => mkdtempSync(join(tmpdir(), "halfpower-cli-"));
+const folders: string[] = [];
+
+/** A folder of its own, gone when the tests of the file are done. */
+export function folder(): string {
+  const path = mkdtempSync(join(tmpdir(), "halfpower-cli-"));
+  folders.push(path);
+  return path;
+}
+
+afterAll(() => {
+  for (const path of folders.splice(0)) rmSync(path, { recursive: true, force: true });
+});
 
 /** A file of this content in a folder of its own. */
 export function fileOf(content: string | object, name = "pump.chain.json"): string {
