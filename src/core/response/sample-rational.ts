@@ -1,5 +1,4 @@
 import type { Polynomial, Rational } from "../rational.ts";
-import { divideBy } from "./kernels.ts";
 
 /** Complex values over a grid of frequencies, real and imaginary parts apart. */
 export interface ComplexArray {
@@ -15,39 +14,27 @@ export function constant(value: number, length: number): ComplexArray {
   return { re: new Float64Array(length).fill(value), im: new Float64Array(length) };
 }
 
-/** `num/den` over the grid; up to the second degree the coefficients are held in locals. */
+/** `num/den` over the grid. */
 export function sampleRational({ num, den, omega0 }: Rational, omega: Float64Array): ComplexArray {
   if (den.length === 1) return samplePolynomial(num, omega0, omega, 1 / den[0]);
-  if (num.length <= 3 && den.length <= 3) return sampleQuadratics(num, den, omega0, omega);
   const out = samplePolynomial(num, omega0, omega);
   divideBy(out, samplePolynomial(den, omega0, omega));
   return out;
 }
 
-function sampleQuadratics(
-  num: Polynomial,
-  den: Polynomial,
-  omega0: number,
-  omega: Float64Array,
-): ComplexArray {
-  const out = empty(omega.length);
-  const { re, im } = out;
-  const [n0, n1 = 0, n2 = 0] = num;
-  const [d0, d1 = 0, d2 = 0] = den;
-  const inverse = 1 / omega0;
-  const count = omega.length;
-  for (let k = 0; k < count; k++) {
-    const x = omega[k] * inverse;
-    const xx = x * x;
-    const nr = n0 - n2 * xx;
-    const ni = n1 * x;
-    const dr = d0 - d2 * xx;
-    const di = d1 * x;
-    const size = 1 / (dr * dr + di * di);
-    re[k] = (nr * dr + ni * di) * size;
-    im[k] = (ni * dr - nr * di) * size;
+/** `quotient /= divisor` */
+function divideBy(quotient: ComplexArray, divisor: ComplexArray): void {
+  const { re, im } = quotient;
+  const { re: dr, im: di } = divisor;
+  for (let k = 0; k < re.length; k++) {
+    const a = re[k];
+    const b = im[k];
+    const c = dr[k];
+    const d = di[k];
+    const size = 1 / (c * c + d * d);
+    re[k] = (a * c + b * d) * size;
+    im[k] = (b * c - a * d) * size;
   }
-  return out;
 }
 
 /** A polynomial of `jω/omega0`, times a factor, over the grid: even powers are real, odd ones imaginary. */

@@ -1,7 +1,8 @@
 import type { Chain, ChainStage } from "../chain.ts";
 import type { Rational } from "../rational.ts";
-import { Carrier } from "./carrier.ts";
-import { type ElementSamples, sampleElement } from "./samples.ts";
+import { wrapDeg } from "../units/decibel.ts";
+import { carryAll } from "./carry.ts";
+import { type Step, sampleElement } from "./samples.ts";
 import { settle } from "./settle.ts";
 
 /** The chain's response over a grid of frequencies. */
@@ -20,49 +21,56 @@ export interface SampledResponse {
 export class Sampler {
   readonly freqHz: Float64Array;
   readonly #omega: Float64Array;
-  readonly #carrier: Carrier;
-  readonly #stages = new WeakMap<ChainStage, readonly ElementSamples[]>();
+  readonly #stages = new WeakMap<ChainStage, readonly Step[]>();
 
   constructor(freqHz: Float64Array) {
     this.freqHz = freqHz;
-    this.#omega = freqHz.map((freq) => 2 * Math.PI * freq);
-    this.#carrier = new Carrier(this.#omega);
+    this.#omega = new Float64Array(freqHz.length);
+    for (let k = 0; k < freqHz.length; k++) this.#omega[k] = 2 * Math.PI * freqHz[k];
   }
 
   response(chain: Chain): SampledResponse {
-    this.#carryChain(this.#carrier, chain);
-    if (chain.against === "insertion") this.#carrier.divideBy(this.#direct(chain));
+    const response = this.#evaluate(chain);
+    if (chain.against === "insertion") this.#subtractDirect(response, chain);
+    settle(chain, this.freqHz, response.gainDb, response.phaseDeg);
+    return response;
+  }
+
+  #evaluate(chain: Chain): SampledResponse {
     const gainDb = new Float64Array(this.freqHz.length);
     const phaseDeg = new Float64Array(this.freqHz.length);
-    this.#carrier.read(gainDb, phaseDeg);
-    settle(chain, this.freqHz, gainDb, phaseDeg);
+    carryAll(this.#steps(chain), this.#omega, gainDb, phaseDeg);
     return { freqHz: this.freqHz, gainDb, phaseDeg };
   }
 
-  /** What the load would get with the chain taken out. */
-  #direct(chain: Chain): Carrier {
-    const direct = new Carrier(this.#omega);
-    this.#carryChain(direct, { ...chain, stages: [] });
-    return direct;
+  /** Counts against what the load would get with the chain taken out. */
+  #subtractDirect({ gainDb, phaseDeg }: SampledResponse, chain: Chain): void {
+    const direct = this.#evaluate({ ...chain, stages: [] });
+    for (let k = 0; k < gainDb.length; k++) {
+      gainDb[k] -= direct.gainDb[k];
+      phaseDeg[k] = wrapDeg(phaseDeg[k] - direct.phaseDeg[k]);
+    }
   }
 
-  #carryChain(carrier: Carrier, chain: Chain): void {
-    carrier.start();
-    if (chain.loadImpedance !== undefined) carrier.carry(this.#branch("shunt", chain.loadImpedance));
-    for (let k = chain.stages.length - 1; k >= 0; k--) carrier.carry(this.#samplesOf(chain.stages[k]));
-    if (chain.against !== "input") carrier.carry(this.#branch("series", chain.sourceImpedance));
+  /** From the source to the load. */
+  #steps({ sourceImpedance, stages, loadImpedance, against }: Chain): readonly Step[] {
+    const steps: Step[] = [];
+    if (against !== "input") steps.push(...this.#branch("series", sourceImpedance));
+    for (const stage of stages) steps.push(...this.#stepsOf(stage));
+    if (loadImpedance !== undefined) steps.push(...this.#branch("shunt", loadImpedance));
+    return steps;
   }
 
-  #branch(form: "series" | "shunt", impedance: Rational): readonly ElementSamples[] {
+  #branch(form: "series" | "shunt", impedance: Rational): readonly Step[] {
     return sampleElement({ form, impedance }, this.#omega);
   }
 
-  #samplesOf(stage: ChainStage): readonly ElementSamples[] {
-    let samples = this.#stages.get(stage);
-    if (samples === undefined) {
-      samples = stage.elements.flatMap((element) => sampleElement(element, this.#omega));
-      this.#stages.set(stage, samples);
+  #stepsOf(stage: ChainStage): readonly Step[] {
+    let steps = this.#stages.get(stage);
+    if (steps === undefined) {
+      steps = stage.elements.flatMap((element) => sampleElement(element, this.#omega));
+      this.#stages.set(stage, steps);
     }
-    return samples;
+    return steps;
   }
 }

@@ -1,22 +1,32 @@
 import { plain } from "../dual.ts";
-import type { DistributedElement, Element, IsolatingElement, LumpedElement } from "../elements/element.ts";
+import type {
+  DistributedElement,
+  Element,
+  IrrationalTransfer,
+  IsolatingElement,
+  LumpedElement,
+} from "../elements/element.ts";
 import type { Polynomial, Rational } from "../rational.ts";
-import { multiplyBy } from "./kernels.ts";
 import { type ComplexArray, constant, empty, samplePolynomial, sampleRational } from "./sample-rational.ts";
 
 /**
- * An element over a grid, classed by what it does to the pair (V, I), so that each class has a loop of its own.
- * Branches are so cheap that their three coefficients are kept instead of samples.
+ * What an element does to the pair (V, I) and to the product n, classed so that each class has a loop of its own.
+ * Branches and short sections are so cheap that their coefficients are kept instead of samples over the grid.
  */
-export type ElementSamples =
+export type Step =
   /** `V += Z·I` */
   | { readonly form: "series"; readonly by: BranchCoefficients | ComplexArray }
   /** `I += Y·V` */
   | { readonly form: "shunt"; readonly by: BranchCoefficients | ComplexArray }
-  /** No current flows from its output back to its input: `I = 0`. */
-  | { readonly form: "isolating"; readonly transfer: ComplexArray }
+  /** `I = 0`: no current flows back from output to input. */
+  | { readonly form: "isolation" }
+  /** `n *= num`, `V *= den`, each of at most the second degree; only before an isolation. */
+  | { readonly form: "section"; readonly section: Rational }
+  /** `n *= by` */
+  | { readonly form: "factor"; readonly by: ComplexArray }
   | MatrixSamples;
 
+/** `V, I = a·V + b·I, c·V + d·I` and `n *= n` */
 export interface MatrixSamples {
   readonly form: "matrix";
   readonly n: ComplexArray;
@@ -37,8 +47,8 @@ export interface BranchCoefficients {
   readonly falling: number;
 }
 
-/** Samples one element over angular frequencies in rad/s; an isolating stage is parted from its ports. */
-export function sampleElement(element: Element, omega: Float64Array): readonly ElementSamples[] {
+/** The steps of one element over angular frequencies in rad/s, from its input to its output. */
+export function sampleElement(element: Element, omega: Float64Array): readonly Step[] {
   switch (element.form) {
     case "series":
       return [sampleSeries(element.impedance, omega)];
@@ -53,14 +63,14 @@ export function sampleElement(element: Element, omega: Float64Array): readonly E
   }
 }
 
-function sampleSeries({ num, den, omega0 }: Rational, omega: Float64Array): ElementSamples {
+function sampleSeries({ num, den, omega0 }: Rational, omega: Float64Array): Step {
   const by = branchCoefficients(num, den, omega0);
   if (by !== undefined) return { form: "series", by };
   const [b, d] = [samplePolynomial(num, omega0, omega), samplePolynomial(den, omega0, omega)];
   return { form: "matrix", n: d, a: d, b, c: constant(0, omega.length), d };
 }
 
-function sampleShunt({ num, den, omega0 }: Rational, omega: Float64Array): ElementSamples {
+function sampleShunt({ num, den, omega0 }: Rational, omega: Float64Array): Step {
   const by = branchCoefficients(den, num, omega0);
   if (by !== undefined) return { form: "shunt", by };
   const [a, c] = [samplePolynomial(num, omega0, omega), samplePolynomial(den, omega0, omega)];
@@ -88,13 +98,13 @@ function overMonomial(p: Polynomial, q: Polynomial): Omit<BranchCoefficients, "i
   return { real: term(0), rising: term(1), falling: power === 1 ? p[0] / q[1] : 0 };
 }
 
-function sampleLumped({ n, a, b, c, d, omega0 }: LumpedElement, omega: Float64Array): ElementSamples {
+function sampleLumped({ n, a, b, c, d, omega0 }: LumpedElement, omega: Float64Array): Step {
   const sample = (p: Polynomial) => samplePolynomial(p, omega0, omega);
   return { form: "matrix", n: sample(n), a: sample(a), b: sample(b), c: sample(c), d: sample(d) };
 }
 
 /** See `lineMatrix` in two-port.ts. */
-function sampleLine(line: DistributedElement, omega: Float64Array): ElementSamples {
+function sampleLine(line: DistributedElement, omega: Float64Array): Step {
   const count = omega.length;
   const [n, a, b, c] = [empty(count), empty(count), empty(count), empty(count)];
   const neperPerRoot = line.lossNeper / Math.sqrt(2 * Math.PI * line.lossAtHz);
@@ -113,12 +123,13 @@ function sampleLine(line: DistributedElement, omega: Float64Array): ElementSampl
   return { form: "matrix", n, a, b, c, d: a };
 }
 
-/** From its input to its output: what it draws, its transfer, what it stands behind. */
-function sampleIsolating(element: IsolatingElement, omega: Float64Array): readonly ElementSamples[] {
-  const { inputAdmittance, outputImpedance } = element;
+/** What it draws, its transfer, what it stands behind. */
+function sampleIsolating(element: IsolatingElement, omega: Float64Array): readonly Step[] {
+  const { inputAdmittance, transfer, outputImpedance } = element;
   return [
     ...(inputAdmittance ? [{ form: "shunt" as const, by: samplePort(inputAdmittance, omega) }] : []),
-    { form: "isolating", transfer: sampleTransfer(element.transfer, omega) },
+    ...sampleTransfer(transfer, omega),
+    { form: "isolation" },
     ...(outputImpedance ? [{ form: "series" as const, by: samplePort(outputImpedance, omega) }] : []),
   ];
 }
@@ -126,14 +137,17 @@ function sampleIsolating(element: IsolatingElement, omega: Float64Array): readon
 const samplePort = (port: Rational, omega: Float64Array): BranchCoefficients | ComplexArray =>
   branchCoefficients(port.num, port.den, port.omega0) ?? sampleRational(port, omega);
 
-function sampleTransfer(transfer: IsolatingElement["transfer"], omega: Float64Array): ComplexArray {
-  if (transfer.type === "irrational") {
-    const out = empty(omega.length);
-    for (let k = 0; k < omega.length; k++) ({ re: out.re[k], im: out.im[k] } = plain(transfer.at(omega[k])));
-    return out;
-  }
-  const [first, ...others] = transfer.sections;
-  const out = first === undefined ? constant(1, omega.length) : sampleRational(first, omega);
-  for (const section of others) multiplyBy(out, sampleRational(section, omega));
-  return out;
+function sampleTransfer(transfer: IsolatingElement["transfer"], omega: Float64Array): readonly Step[] {
+  if (transfer.type === "irrational") return [{ form: "factor", by: sampleIrrational(transfer, omega) }];
+  return transfer.sections.map((section) =>
+    section.num.length <= 3 && section.den.length <= 3
+      ? { form: "section", section }
+      : { form: "factor", by: sampleRational(section, omega) },
+  );
+}
+
+function sampleIrrational({ at }: IrrationalTransfer, omega: Float64Array): ComplexArray {
+  const { re, im } = empty(omega.length);
+  for (let k = 0; k < omega.length; k++) ({ re: re[k], im: im[k] } = plain(at(omega[k])));
+  return { re, im };
 }
