@@ -1,5 +1,5 @@
 import { isolating } from "../../elements/make.ts";
-import { add, multiply, scale } from "../../polynomial.ts";
+import { add, multiply } from "../../polynomial.ts";
 import { rational } from "../../rational.ts";
 import { capacitance, defineKind, gain as gainPart, optional, resistance } from "../kind.ts";
 import { gbwPart, inverseOpenLoopGain } from "../op-amp.ts";
@@ -34,11 +34,13 @@ export const sallenKeyHighpass = defineKind<SallenKeyValues>({
     const plusInput = add([1 / gain], inverseOpenLoopGain(gbw));
     const ladder = [1, C2 * R2 + C1 * R1 + C2 * R1, C1 * C2 * R1 * R2];
     const D = add(multiply(plusInput, ladder), [0, -C2 * R2]);
-    const middle = multiply(multiply(plusInput, [1, C2 * R2]), [0, C1 * R1]);
+    // D less what the middle node holds back, with that multiplied out: coefficients that must be zero are, and none
+    // is left of rounding to bend the response far out.
+    const drawn = add(multiply(plusInput, [1, C2 * R1]), multiply(add(plusInput, [-1]), [0, C2 * R2]));
     return [
       {
         ...isolating(rational([0, 0, C1 * C2 * R1 * R2], D)),
-        inputAdmittance: rational(multiply([0, C1], add(D, scale(middle, -1))), D),
+        inputAdmittance: rational(multiply([0, C1], drawn), D),
       },
     ];
   },
