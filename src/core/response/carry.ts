@@ -1,13 +1,14 @@
 import { addSeries, addShunt } from "./branch-loops.ts";
-import { clearCurrent, polar, start } from "./end-loops.ts";
-import { keepInRange } from "./range-loops.ts";
+import { gain, phase } from "./polar-loops.ts";
+import { keepPairInRange, keepProductInRange } from "./range-loops.ts";
 import type { ComplexArray } from "./sample-rational.ts";
 import type { BranchCoefficients, Step } from "./samples.ts";
+import { clearCurrent, start } from "./start-loops.ts";
 import { addSampledSeries, addSampledShunt, carryMatrix, multiply, multiplySection } from "./step-loops.ts";
 import { BLOCK_SIZE } from "./working.ts";
 
 /** So many steps may be taken before the numbers are looked at for leaving the range of double precision. */
-const STEPS_BETWEEN_CHECKS = 8;
+const STEPS_BETWEEN_CHECKS = 16;
 
 /**
  * Gain in dB and phase in (−180, 180] of a row of steps, given from source to load, over a grid of angular frequencies
@@ -19,6 +20,11 @@ export function carryAll(
   gainDb: Float64Array,
   phaseDeg: Float64Array,
 ): void {
+  const changesProduct = steps.some(({ form }) => form !== "series" && form !== "shunt");
+  const keepInRange = (count: number) => {
+    keepPairInRange(count);
+    if (changesProduct) keepProductInRange(count);
+  };
   for (let at = 0; at < omega.length; at += BLOCK_SIZE) {
     const count = Math.min(BLOCK_SIZE, omega.length - at);
     start(at, count, omega);
@@ -27,7 +33,8 @@ export function carryAll(
       if (taken % STEPS_BETWEEN_CHECKS === 0) keepInRange(count);
     }
     keepInRange(count);
-    polar(at, count, gainDb, phaseDeg);
+    gain(at, count, gainDb);
+    phase(at, count, phaseDeg);
   }
 }
 

@@ -9,6 +9,7 @@ function rangeLoops({ vRe, vIm, iRe, iIm, nRe, nIm, exponent }: Working) {
   const most = 2 ** 400;
   const least = 2 ** -400;
 
+  /** Takes powers of two out of V and I together. */
   function keepPairInRange(count: number): void {
     for (let k = 0; k < count; k++) {
       const size = vRe[k] * vRe[k] + vIm[k] * vIm[k] + iRe[k] * iRe[k] + iIm[k] * iIm[k];
@@ -23,6 +24,7 @@ function rangeLoops({ vRe, vIm, iRe, iIm, nRe, nIm, exponent }: Working) {
     }
   }
 
+  /** Takes powers of two out of n. */
   function keepProductInRange(count: number): void {
     for (let k = 0; k < count; k++) {
       const size = nRe[k] * nRe[k] + nIm[k] * nIm[k];
@@ -35,14 +37,10 @@ function rangeLoops({ vRe, vIm, iRe, iIm, nRe, nIm, exponent }: Working) {
     }
   }
 
-  /** Takes powers of two out of the pair and of n where they have left the range. */
-  return function keepInRange(count: number): void {
-    keepPairInRange(count);
-    keepProductInRange(count);
-  };
+  return { keepPairInRange, keepProductInRange };
 }
 
-export const keepInRange = rangeLoops(WORKING);
+export const { keepPairInRange, keepProductInRange } = rangeLoops(WORKING);
 
 /** Exponent of the largest part; zero at a null and where there is no number. */
 function powerOf(...parts: readonly number[]): number {
