@@ -1,11 +1,13 @@
+import type { FamilyAnswer } from "../core/design/figures.ts";
 import type { ResolvedChain } from "../document/resolve.ts";
 import type { ChainDocument } from "../document/types.ts";
-import type { KeepCommand } from "./message.ts";
+import type { DesignForm } from "./design-form.ts";
+import type { Chosen, KeepCommand } from "./message.ts";
 import type { Field } from "./rows.ts";
 import type { TextField } from "./text-field.ts";
 
 /** What stands in front of the chain and takes the keys. */
-export type Dialog = FieldDialog | PromptDialog | ListDialog | QuestionDialog | HelpDialog;
+export type Dialog = FieldDialog | PromptDialog | ListDialog | DesignDialog | QuestionDialog | HelpDialog;
 
 /** A value being typed over, in place. */
 export interface FieldDialog {
@@ -23,6 +25,7 @@ export interface FieldDialog {
 export type PromptPurpose =
   | { readonly type: "frequency" }
   | { readonly type: "level" }
+  | { readonly type: "solve" }
   | { readonly type: "gain-axis" }
   | { readonly type: "open" }
   | { readonly type: "save-as"; readonly after: AfterSave | undefined }
@@ -63,6 +66,21 @@ export interface ListDialog {
   readonly filter: TextField;
   /** The response of the item in hand, by its value, once it is known. */
   readonly look: Look | undefined;
+}
+
+/** What a filter has to do, and the families that do it. */
+export interface DesignDialog {
+  readonly type: "design";
+  readonly form: DesignForm;
+  /** Row in hand: those of the form first, then the families. */
+  readonly index: number;
+  readonly input: TextField;
+  readonly problem: string | undefined;
+  readonly families: readonly FamilyAnswer[];
+  readonly chosen: Chosen | undefined;
+  readonly look: Look | undefined;
+  /** Number of the request that is waited for. */
+  readonly request: number;
 }
 
 export interface Look {

@@ -1,5 +1,6 @@
 import { ask } from "./actions/ask.ts";
 import { byColumn, byDecade, byFineStep, exchangePin, pin, toEnd } from "./actions/cursor.ts";
+import { openDesign } from "./actions/design.ts";
 import { editField, editTolerance, nudge } from "./actions/field.ts";
 import { askForName, askToOpen, quit, save } from "./actions/files.ts";
 import { dropGhost, flipGhost, keepGhost } from "./actions/ghost.ts";
@@ -8,6 +9,7 @@ import { openHelp } from "./actions/help.ts";
 import { redo, undo } from "./actions/history.ts";
 import { chooseNudge, chooseOverlays, chooseWhatToAdd } from "./actions/list.ts";
 import { askToKeepChain, askToKeepStage, browsePresets } from "./actions/presets.ts";
+import { realiseInHand, snapInHand } from "./actions/real-parts.ts";
 import { rowInHand, toField, toRow } from "./actions/rows.ts";
 import { duplicate, move, nameOf, remove, takeOut } from "./actions/stages.ts";
 import { pan, wholeSweep, zoom } from "./actions/window.ts";
@@ -23,6 +25,7 @@ export const KEY_GROUPS = [
   "Walk the chain",
   "Change a value",
   "Change the chain",
+  "Real parts",
   "Keep",
   "Leave",
 ] as const;
@@ -121,6 +124,13 @@ export const BINDINGS: readonly Binding[] = [
   binding("Change the chain", "o", "o", "take out of the line, or put back", takeOut),
   binding("Change the chain", "r", "r", "rename", askToRename),
 
+  binding("Real parts", "D", "D", "design a filter from its edges", openDesign),
+  binding("Real parts", "R", "R", "make the ideal stage in hand of real parts", realiseInHand),
+  binding("Real parts", "E", "E", "snap the stage's parts to the series", snapInHand),
+  binding("Real parts", "i", "i", "solve the value in hand for a gain at the cursor", (state) =>
+    ask(state, { type: "solve" }, "gain at the cursor, in dB"),
+  ),
+
   binding("Keep", "s", "s", "save", (state) => save(state)),
   binding("Keep", "S", "S", "save under a name", (state) => askForName(state)),
   binding("Keep", "O", "O", "open a file or a preset", askToOpen),
@@ -152,6 +162,13 @@ export function hintsOf(state: EditorState): readonly (readonly [keys: string, d
       ];
     case "list":
       return listHints(state.dialog.purpose);
+    case "design":
+      return [
+        ["↑ ↓", "rows"],
+        ["← →", "choose"],
+        ["Enter", "on a family: insert it"],
+        ["Esc", "back"],
+      ];
     case "question":
       return state.dialog.answers.map(({ key, words }) => [key, words]);
     case "help":

@@ -1,6 +1,11 @@
+import type { FamilyAnswer } from "../core/design/figures.ts";
+import type { Realisation } from "../core/design/realise/types.ts";
+import type { FilterSpec } from "../core/filters/transform.ts";
+import type { Result } from "../core/result.ts";
 import type { ResolvedChain } from "../document/resolve.ts";
 import type { ChainDocument, StageDocument } from "../document/types.ts";
-import type { AfterSave } from "./dialog.ts";
+import type { DesignRequest } from "./design-form.ts";
+import type { AfterSave, Look } from "./dialog.ts";
 import type { KeyPress } from "./key-press.ts";
 import type { EditorContext, EditorState, FileOrigin, Judged, Size } from "./state.ts";
 
@@ -28,6 +33,7 @@ export type Message =
     }
   | { readonly type: "preset-seen"; readonly name: string; readonly look: PresetLook }
   | { readonly type: "left-behind"; readonly work: LeftWork }
+  | { readonly type: "designed"; readonly designed: Designed }
   | { readonly type: "judged"; readonly judged: Judged }
   | { readonly type: "preset-held"; readonly name: string; readonly command: KeepCommand }
   | { readonly type: "told"; readonly text: string; readonly bad: boolean };
@@ -67,6 +73,17 @@ export type PresetLook =
     }
   | { readonly ok: false; readonly words: string };
 
+/** The answer to a design request. */
+export interface Designed {
+  readonly id: number;
+  readonly families: readonly FamilyAnswer[];
+  /** The family in hand, made of what was asked for. */
+  readonly chosen: Chosen;
+  readonly look: Look | undefined;
+}
+
+export type Chosen = Result<{ readonly spec: FilterSpec; readonly realisation: Realisation | undefined }>;
+
 /** Work that an ended program left unsaved. */
 export interface LeftWork {
   readonly id: string;
@@ -88,6 +105,13 @@ export type Command =
   | { readonly type: "remove-preset"; readonly name: string }
   | { readonly type: "recover"; readonly id: string }
   | { readonly type: "discard"; readonly id: string }
+  | {
+      readonly type: "design";
+      readonly id: number;
+      readonly request: DesignRequest;
+      /** Position of the family that is to be made. */
+      readonly family: number;
+    }
   | { readonly type: "quit" };
 
 /** Keeps a preset under a name; one of that name is replaced only on request. */

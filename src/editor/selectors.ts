@@ -4,7 +4,7 @@ import { chainBehind, type EditorState, shownChain, type Window } from "./state.
 
 /** What is looked at in a list before it is taken. */
 export const lookOf = ({ dialog }: EditorState): Look | undefined =>
-  dialog?.type === "list" ? dialog.look : undefined;
+  dialog?.type === "list" || dialog?.type === "design" ? dialog.look : undefined;
 
 /** The chain that charts and reading show: one that is looked at, else the present one or the one kept. */
 export const chainOnCharts = (state: EditorState): ResolvedChain =>

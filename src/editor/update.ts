@@ -1,5 +1,6 @@
 import { problemText } from "../document/problem.ts";
 import { resolveChain } from "../document/resolve.ts";
+import { designed, designKey } from "./actions/design.ts";
 import { editField, fieldKey, leave } from "./actions/field.ts";
 import { saveWasHeld, wasSaved } from "./actions/files.ts";
 import { helpKey } from "./actions/help.ts";
@@ -56,6 +57,8 @@ export function update(state: EditorState, message: Message): Step {
       return seen(state, message.name, message.look);
     case "left-behind":
       return askAboutLeftWork(state, message.work);
+    case "designed":
+      return designed(state, message.designed);
     case "judged":
       return step({ ...state, judged: message.judged });
     case "preset-held":
@@ -79,6 +82,8 @@ function onKey(state: EditorState, message: KeyMessage): Step {
       return promptKey(state, dialog, message);
     case "list":
       return listKey(state, dialog, message);
+    case "design":
+      return designKey(state, dialog, message);
     case "question":
       return questionKey(state, dialog, message);
     case "help":

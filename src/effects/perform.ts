@@ -7,6 +7,7 @@ import type { Command, Message, SaveCommand } from "../editor/message.ts";
 import type { EditorState, FileOrigin } from "../editor/state.ts";
 import { type OpenedChain as ChainFile, openChainFile, saveChainFile } from "./chain-files.ts";
 import type { ContextChain } from "./chain-text.ts";
+import { designAll } from "./designing.ts";
 import { fileContext, formulaParser } from "./document-context.ts";
 import { isFileName } from "./file-name.ts";
 import { type FileProblem, fileProblemText } from "./file-problem.ts";
@@ -55,9 +56,16 @@ export async function perform(command: Command, means: Means): Promise<void> {
     case "discard":
       means.journal.discard({ id: command.id });
       return offerLeftWork(means);
+    case "design":
+      return design(command, means);
     case "quit":
       return means.quit();
   }
+}
+
+async function design(command: Command & { type: "design" }, { state, dispatch }: Means): Promise<void> {
+  const designed = await designAll(command, state().context);
+  if (designed !== undefined) dispatch({ type: "designed", designed });
 }
 
 const refused = (problem: FileProblem): Message => ({

@@ -8,6 +8,7 @@ import { chainOnCharts, windowOnCharts } from "../editor/selectors.ts";
 import type { EditorState, Size } from "../editor/state.ts";
 import { chainPane } from "./chain-pane.ts";
 import { chartLines } from "./charts.ts";
+import { designPane } from "./design-pane.ts";
 import { helpPane } from "./help-pane.ts";
 import { hintLine } from "./hint-line.ts";
 import { listPane } from "./list-pane.ts";
@@ -84,6 +85,7 @@ function sidePane(
   reading: ReturnType<typeof readAt>,
 ): readonly Line[] {
   if (state.dialog?.type === "list") return listPane(state.dialog, list, charset);
+  if (state.dialog?.type === "design") return designPane(state.dialog, list, charset);
   if (state.dialog?.type === "question") return questionPane(state.dialog, list, charset);
   return chainPane(state, reading, list, charset);
 }

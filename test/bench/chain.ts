@@ -28,6 +28,9 @@ const stageOf = (section: Section, k: number): ChainStage =>
 
 export const STAGES: readonly ChainStage[] = SECTIONS.map(stageOf);
 
+/** All sections made anew, so that nothing is known of them. */
+export const freshStages = (): readonly ChainStage[] => SECTIONS.map(stageOf);
+
 export const chainOf = (stages: readonly ChainStage[]): Chain =>
   makeChain({ source: rational([SOURCE_OHM]), stages, load: rational([LOAD_OHM]) });
 

@@ -33,7 +33,13 @@ export interface FamilyAnswer {
 
 /** Every family's filter of least order for the requirement, or why there is none. */
 export const compareFamilies = (requirement: Requirement): readonly FamilyAnswer[] =>
-  FILTER_FAMILIES.map((family) => ({ family, figures: figuresOf(family, requirement) }));
+  FILTER_FAMILIES.map((family) => familyFigures(family, requirement));
+
+/** One family's filter of least order, or why there is none. */
+export const familyFigures = (family: FilterFamily, requirement: Requirement): FamilyAnswer => ({
+  family,
+  figures: figuresOf(family, requirement),
+});
 
 function figuresOf(family: FilterFamily, requirement: Requirement): Result<FamilyFigures> {
   const designed = leastDesign(family, requirement);

@@ -6,6 +6,7 @@ import { typeInto } from "../text-field.ts";
 import { openNamed, saveUnder } from "./files.ts";
 import { toTypedFrequency, toTypedLevel } from "./go-to.ts";
 import { keepChainAs, keepStageAs, renamePresetTo } from "./presets.ts";
+import { solveFor } from "./real-parts.ts";
 import { insertStage, rename } from "./stages.ts";
 
 /** A key while a line is being typed. */
@@ -37,6 +38,8 @@ function carryOut(state: EditorState, purpose: PromptPurpose, text: string): Ste
       return toTypedFrequency(state, text);
     case "level":
       return toTypedLevel(state, text);
+    case "solve":
+      return solveFor(state, text);
     case "gain-axis":
       return setGainAxis(state, text);
     case "rename":

@@ -35,7 +35,7 @@ export const chainOfOne = (stage: StageDocument, sweep: ChainDocument["sweep"]):
 export const nameOf = ({ name, kind }: StageDocument): string => name || kind;
 
 /** Behind the stage in hand; behind the source or the load, first or last. */
-function positionToInsert(state: EditorState): number {
+export function positionToInsert(state: EditorState): number {
   const row = rowInHand(state);
   if (row.type === "stage") return row.index + 1;
   return row.type === "chain" || row.type === "source" ? 0 : state.document.stages.length;
