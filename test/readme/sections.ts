@@ -17,6 +17,12 @@ export const SECTIONS: Readonly<Record<string, () => Promise<string>>> = {
   "read json": () => command(["read", "strain-bridge", "1k", "--json"]),
   sweep: () =>
     command(["sweep", "strain-bridge", "--from", "100", "--to", "10k", "--per-decade", "3", "--csv"]),
+  check: () => command(["check", "strain-bridge"]),
+  design: () =>
+    command(
+      ["design", ..."--pass 1k --pass-loss 0.5 --stop 9k --stop-loss 74 --as sallen-key".split(" ")],
+      "with asides",
+    ),
   presets: () => command(["presets"]),
 };
 
@@ -35,7 +41,7 @@ async function screen(size: { columns: number; rows: number }, keys: readonly st
   }
 }
 
-async function command(argv: readonly string[]): Promise<string> {
+async function command(argv: readonly string[], asides: "with asides" | "alone" = "alone"): Promise<string> {
   const home = makeHome();
   try {
     const presets = presetStore(
@@ -43,7 +49,7 @@ async function command(argv: readonly string[]): Promise<string> {
     );
     const { stdout, stderr, exitCode } = await run(argv, { presets });
     if (exitCode !== 0) throw new Error(stderr);
-    return fenced(`$ halfpower ${argv.join(" ")}\n${stdout}`);
+    return fenced(`$ halfpower ${argv.join(" ")}\n${stdout}${asides === "alone" ? "" : stderr}`);
   } finally {
     home.remove();
   }
