@@ -121,6 +121,12 @@ export function integerPower(base: Dual, exponent: number): Dual {
   return exponent < 0 ? divide(ONE, result) : result;
 }
 
+/** Beyond it rounding of the frequency alone would turn the phase by more than about 1e-4°. */
+const FARTHEST_ANGLE = 1e10;
+
+/** An angle in radians that a rounded frequency still tells; NaN beyond, so that there is no value and not any value. */
+export const toldAngle = (angle: number): number => (Math.abs(angle) <= FARTHEST_ANGLE ? angle : Number.NaN);
+
 /**
  * `e^(re + j·im)` of plain numbers with derivatives by ln ω: an attenuation in nepers and an angle in radians. However
  * far down, it is no null, but for an infinite attenuation.
@@ -129,7 +135,8 @@ export function exponential(re: number, im: number, dRe: number, dIm: number): D
   if (re === -Infinity) return ZERO;
   const exponent = Math.round(re / Math.LN2);
   const size = Math.exp(re - exponent * Math.LN2);
-  const [x, y] = [size * Math.cos(im), size * Math.sin(im)];
+  const angle = toldAngle(im);
+  const [x, y] = [size * Math.cos(angle), size * Math.sin(angle)];
   return normalised(x, y, x * dRe - y * dIm, x * dIm + y * dRe, exponent);
 }
 

@@ -10,6 +10,7 @@ import {
   negate,
   ONE,
   plain,
+  toldAngle,
   withDerivative,
 } from "../dual.ts";
 import { BUILT_IN_CONSTANTS, type Constants, type FormulaFunction, type FormulaTree } from "./tree.ts";
@@ -102,13 +103,17 @@ function pointSinh(z: Dual): Dual {
   // So near the origin it is the argument itself, even where that is below the least double.
   if (z.exponent < TINY_EXPONENT) return dual(z.re, z.im, 0, 0, z.exponent);
   const { re, im } = plain(z);
-  if (Math.abs(re) < LARGE_ARGUMENT) return dual(Math.sinh(re) * Math.cos(im), Math.cosh(re) * Math.sin(im));
+  const angle = toldAngle(im);
+  if (Math.abs(re) < LARGE_ARGUMENT)
+    return dual(Math.sinh(re) * Math.cos(angle), Math.cosh(re) * Math.sin(angle));
   return multiply(HALF, add(exponential(re, im, 0, 0), negate(exponential(-re, -im, 0, 0))));
 }
 
 function pointCosh(z: Dual): Dual {
   const { re, im } = plain(z);
-  if (Math.abs(re) < LARGE_ARGUMENT) return dual(Math.cosh(re) * Math.cos(im), Math.sinh(re) * Math.sin(im));
+  const angle = toldAngle(im);
+  if (Math.abs(re) < LARGE_ARGUMENT)
+    return dual(Math.cosh(re) * Math.cos(angle), Math.sinh(re) * Math.sin(angle));
   return multiply(HALF, add(exponential(re, im, 0, 0), exponential(-re, -im, 0, 0)));
 }
 

@@ -1,4 +1,4 @@
-import { plain } from "../dual.ts";
+import { plain, toldAngle } from "../dual.ts";
 import type {
   DistributedElement,
   Element,
@@ -110,7 +110,8 @@ function sampleLine(line: DistributedElement, omega: Float64Array): Step {
   const neperPerRoot = line.lossNeper / Math.sqrt(2 * Math.PI * line.lossAtHz);
   for (let k = 0; k < count; k++) {
     const loss = Math.exp(-neperPerRoot * Math.sqrt(omega[k]));
-    const [cos, sin] = [Math.cos(omega[k] * line.delayS), Math.sin(omega[k] * line.delayS)];
+    const angle = toldAngle(omega[k] * line.delayS);
+    const [cos, sin] = [Math.cos(angle), Math.sin(angle)];
     const twoWay = loss * loss;
     n.re[k] = 2 * loss;
     a.re[k] = cos * (1 + twoWay);

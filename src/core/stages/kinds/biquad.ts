@@ -1,4 +1,4 @@
-import { type Dual, divide, dual } from "../../dual.ts";
+import { type Dual, divide, dual, toldAngle } from "../../dual.ts";
 import { irrational } from "../../elements/make.ts";
 import { defineKind, type NumberSpec, plain, sampleRate } from "../kind.ts";
 
@@ -50,7 +50,8 @@ function delayLine(coefficients: readonly number[], angle: number): Dual {
   const settle = (value: number) => (Math.abs(value) <= 4 * Number.EPSILON * size ? 0 : value);
   let [re, im, dRe, dIm] = [0, 0, 0, 0];
   coefficients.forEach((c, k) => {
-    const [cos, sin] = [c * Math.cos(k * angle), c * Math.sin(k * angle)];
+    const turned = toldAngle(k * angle);
+    const [cos, sin] = [c * Math.cos(turned), c * Math.sin(turned)];
     re += cos;
     im -= sin;
     dRe -= k * angle * sin;
