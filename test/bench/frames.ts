@@ -21,10 +21,10 @@ export async function frameRows(): Promise<readonly Row[]> {
   const home = makeHome();
   try {
     const chain = home.write("twelve.chain.json", CHAIN);
-    const small = await steps(home, "strain-bridge", { columns: 100, rows: 30 }, "right");
-    const large = await steps(home, "strain-bridge", { columns: 160, rows: 48 }, "right");
-    const cursor = await steps(home, chain, { columns: 160, rows: 48 }, "right");
-    const edit = await steps(home, chain, { columns: 160, rows: 48 }, "+");
+    const small = await steps(home, "strain-bridge", { columns: 100, rows: 30 }, ["right", "left"]);
+    const large = await steps(home, "strain-bridge", { columns: 160, rows: 48 }, ["right", "left"]);
+    const cursor = await steps(home, chain, { columns: 160, rows: 48 }, ["right", "left"]);
+    const edit = await steps(home, chain, { columns: 160, rows: 48 }, ["+", "-"]);
     return [
       time("cursor step to finished frame, 12 stages at 160x48", cursor.timesMs),
       time("edit of a part to finished frame, 12 stages at 160x48", edit.timesMs),
@@ -36,11 +36,12 @@ export async function frameRows(): Promise<readonly Row[]> {
   }
 }
 
+/** Twenty presses of the one key, then twenty of the other, so that no end is reached. */
 async function steps(
   home: ReturnType<typeof makeHome>,
   chain: string,
   size: { columns: number; rows: number },
-  key: string,
+  keys: readonly [string, string],
 ) {
   const station = await openStation({ home, chain, size });
   const timesMs: number[] = [];
@@ -48,7 +49,7 @@ async function steps(
   for (let k = 0; k < STEPS; k++) {
     const before = station.emulator.bytesWritten;
     const start = performance.now();
-    station.emulator.press(key);
+    station.emulator.press(keys[Math.floor(k / 20) % 2] as string);
     // The frame is drawn in a turn of its own; what is judged later comes after it.
     for (let turn = 0; turn < MOST_TURNS && station.emulator.bytesWritten === before; turn++) {
       await new Promise((resolve) => setImmediate(resolve));
