@@ -1,12 +1,13 @@
 // Bundles the program into dist/: one entry file, with mathjs and the full screen in chunks of their own that are
 // read only when a formula stage or the workstation asks for them.
-import { chmodSync, rmSync } from "node:fs";
+import { chmodSync, renameSync, rmSync } from "node:fs";
 import { build } from "esbuild";
 
-rmSync("dist", { recursive: true, force: true });
+// Made beside the old one and exchanged, so that a running program or a test never finds half of it.
+const outdir = `dist.${process.pid}`;
 await build({
   entryPoints: { halfpower: "src/main.ts" },
-  outdir: "dist",
+  outdir,
   bundle: true,
   splitting: true,
   format: "esm",
@@ -25,4 +26,6 @@ await build({
     js: 'import { createRequire as __createRequire } from "node:module"; const require = __createRequire(import.meta.url);',
   },
 });
-chmodSync("dist/halfpower.js", 0o755);
+chmodSync(`${outdir}/halfpower.js`, 0o755);
+rmSync("dist", { recursive: true, force: true });
+renameSync(outdir, "dist");
