@@ -2,6 +2,7 @@
 // read only when a formula stage or the workstation asks for them.
 import { chmodSync, renameSync, rmSync } from "node:fs";
 import { build } from "esbuild";
+import { leanInk } from "./lean-ink.mjs";
 
 // Made beside the old one and exchanged, so that a running program or a test never finds half of it.
 const outdir = `dist.${process.pid}`;
@@ -20,6 +21,7 @@ await build({
   legalComments: "none",
   chunkNames: "chunk-[hash]",
   jsx: "automatic",
+  plugins: [leanInk],
   define: { "process.env.NODE_ENV": '"production"' },
   alias: { "react-devtools-core": "./.ci/empty.mjs" },
   banner: {

@@ -19,6 +19,7 @@ export const ellipsisOf = (charset: Charset): string => (charset === "ascii" ? "
 export function cut(text: string, columns: number, charset: Charset = "unicode"): string {
   if (columns <= 0) return "";
   if (widthOf(text) <= columns) return text;
+  if (PLAIN.test(text)) return text.slice(0, columns - 1) + ellipsisOf(charset);
   let kept = "";
   let width = 0;
   for (const { segment } of graphemesOf(text)) {
