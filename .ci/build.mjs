@@ -22,7 +22,8 @@ await build({
   chunkNames: "chunk-[hash]",
   jsx: "automatic",
   plugins: [leanInk],
-  define: { "process.env.NODE_ENV": '"production"' },
+  // Without fetch the layout library decodes its own data instead of loading the whole of Node's web client.
+  define: { "process.env.NODE_ENV": '"production"', fetch: "undefined" },
   alias: { "react-devtools-core": "./.ci/empty.mjs" },
   banner: {
     js: 'import { createRequire as __createRequire } from "node:module"; const require = __createRequire(import.meta.url);',
