@@ -99,7 +99,12 @@ export async function openStation({ size, home, chain = "strain-bridge", env = {
     side: () =>
       emulator
         .screen()
-        .map((row) => row.split(/[┤│]/)[0]?.replace(/-?[\d.]*$/, "").trim())
+        .map((row) =>
+          row
+            .split(/[┤│]/)[0]
+            ?.replace(/-?[\d.]*$/, "")
+            .trim(),
+        )
         .join(" "),
     /** Cells that differ from the frame that was meant; empty where the screen is right. */
     stale: () => emulator.staleCells(terminal.stdout.frame),
