@@ -24,13 +24,20 @@ export function shownSamples({ values, middle, start }: ColumnSamples, tolerance
       if (value < low) low = value;
       if (value > high) high = value;
     }
-    shown[column] = farthest(values, start[column], start[column + 1], low - tolerance, high + tolerance) ?? middle[column];
+    shown[column] =
+      farthest(values, start[column], start[column + 1], low - tolerance, high + tolerance) ?? middle[column];
   }
   return shown;
 }
 
 /** The sample that reaches farthest below `low` or above `high`. A null is farther than anything. */
-function farthest(values: Float64Array, from: number, to: number, low: number, high: number): number | undefined {
+function farthest(
+  values: Float64Array,
+  from: number,
+  to: number,
+  low: number,
+  high: number,
+): number | undefined {
   let found: number | undefined;
   let distance = 0;
   for (let k = from; k < to; k++) {

@@ -53,7 +53,10 @@ export function drawUnderlays(paper: Paper, overlays: Overlays): void {
   drawPoints(paper, overlays.ghost, "ghost");
 }
 
-export function drawBench({ canvas, glyphs, rowScale, frequencyScale }: Paper, points: readonly BenchPoint[] = []) {
+export function drawBench(
+  { canvas, glyphs, rowScale, frequencyScale }: Paper,
+  points: readonly BenchPoint[] = [],
+) {
   for (const { freqHz, value } of points) {
     const [row, column] = [rowOf(rowScale, value), columnOfFrequency(frequencyScale, freqHz)];
     if (row !== undefined && column !== undefined) canvas.put(row, column, glyphs.bench, "bench");
@@ -76,7 +79,8 @@ function drawBand({ canvas, glyphs, rowScale }: Paper, band: Overlays["band"]): 
 function drawEdge({ canvas, glyphs, frequencyScale }: Paper, { freqHz, kind }: VerticalEdge): void {
   const column = columnOfFrequency(frequencyScale, freqHz);
   if (column === undefined) return;
-  const [glyph, role] = kind === "fold" ? ([glyphs.fold, "fold"] as const) : ([glyphs.bandEdge, "band"] as const);
+  const [glyph, role] =
+    kind === "fold" ? ([glyphs.fold, "fold"] as const) : ([glyphs.bandEdge, "band"] as const);
   for (let row = 0; row < canvas.rows; row++) canvas.put(row, column, glyph, role);
 }
 

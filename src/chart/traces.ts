@@ -61,12 +61,12 @@ export class TraceMaker {
   #sampler({ fromHz, toHz, columns }: FrequencyScale): Sampler {
     const key = `${fromHz} ${toHz} ${columns}`;
     const sampler =
-      this.#samplers.get(key) ??
-      new Sampler(logSpaced(fromHz, toHz, (columns - 1) * SAMPLES_PER_COLUMN + 1));
+      this.#samplers.get(key) ?? new Sampler(logSpaced(fromHz, toHz, (columns - 1) * SAMPLES_PER_COLUMN + 1));
     // Taken out and put back, so that the first of the map is the one not used for longest.
     this.#samplers.delete(key);
     this.#samplers.set(key, sampler);
-    if (this.#samplers.size > MOST_SAMPLERS) this.#samplers.delete(this.#samplers.keys().next().value as string);
+    if (this.#samplers.size > MOST_SAMPLERS)
+      this.#samplers.delete(this.#samplers.keys().next().value as string);
     return sampler;
   }
 }

@@ -1,4 +1,3 @@
-
 /** Bounds of a chart in dB or degrees. */
 export interface ValueRange {
   readonly low: number;
@@ -91,11 +90,12 @@ function gainExtent(values: ArrayLike<number>): ValueRange | undefined {
   if (finite.length === 0) return undefined;
   const all = Array.from(values).filter((value) => value < Infinity);
   const high = -leastOf(finite.map((value) => -value));
-  const broad = leastOf(all.map((value, k) => Math.max(value, Math.min(all[k - 1] ?? value, all[k + 1] ?? value))));
+  const broad = leastOf(
+    all.map((value, k) => Math.max(value, Math.min(all[k - 1] ?? value, all[k + 1] ?? value))),
+  );
   const broadLow = Number.isFinite(broad) ? broad : leastOf(finite);
   return { high, low: Math.max(leastOf(all), broadLow - DIP_DB) };
 }
 
 const leastOf = (values: readonly number[]): number =>
   values.reduce((least, value) => Math.min(least, value), Infinity);
-
