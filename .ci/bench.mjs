@@ -3,6 +3,7 @@ import { spawnSync } from "node:child_process";
 import { mkdtempSync, rmSync } from "node:fs";
 import { join } from "node:path";
 import { build } from "esbuild";
+import { leanInk } from "./lean-ink.mjs";
 
 // In node_modules, so that it finds the packages that are not bundled.
 const folder = mkdtempSync(join("node_modules", ".bench-"));
@@ -18,9 +19,10 @@ try {
     mainFields: ["module", "main"],
     minify: true,
     jsx: "automatic",
+    plugins: [leanInk],
     define: { "process.env.NODE_ENV": '"production"' },
     alias: { "react-devtools-core": "./.ci/empty.mjs" },
-    external: ["@lydell/node-pty", "@xterm/headless", "@xterm/addon-unicode11", "esbuild"],
+    external: ["@lydell/node-pty"],
     banner: {
       js: 'import { createRequire as __createRequire } from "node:module"; const require = __createRequire(import.meta.url);',
     },

@@ -1,125 +1,101 @@
-import { type ChildProcess, spawn, spawnSync } from "node:child_process";
-import { join } from "node:path";
-import { createInterface } from "node:readline";
-import { abs, add, type Complex, complex, divide, multiply } from "mathjs";
 import { Sampler } from "../../src/core/response/sampled.ts";
-import {
-  chainOf,
-  editedStages,
-  FREQS_HZ,
-  freshStages,
-  LOAD_OHM,
-  SECTIONS,
-  SOURCE_OHM,
-  STAGES,
-} from "./chain.ts";
-import { ms, type Row, timed, timingOf } from "./timing.ts";
+import { chainOf, editedStages, FREQS_HZ, freshStages } from "./chain.ts";
+import { complexObjectsResponse } from "./complex-objects.ts";
+import { type Numpy, startNumpy } from "./numpy.ts";
+import { notMeasured, type Row } from "./report.ts";
+import { least, median, ms, timed } from "./timing.ts";
 
-const ROUNDS = 12;
-const RUNS_A_ROUND = 60;
+const ROUNDS = 40;
+const RUNS = 25;
+/** Slow, so it takes part in a few rounds only. */
+const OBJECTS_EVERY = 4;
 
-/**
- * Full evaluation and an edit of one part, against NumPy and mathjs on the same chain. The contenders take turns, so
- * that whatever else the machine does falls on all of them.
- */
+/** From part values to gain and phase, and an edit, against NumPy and mathjs on the same chain. */
 export async function evaluationRows(root: string): Promise<readonly Row[]> {
-  const chain = chainOf(STAGES);
-  const warm = new Sampler(FREQS_HZ);
-  // On a grid that stands, as with the other contenders; every stage is new to it.
-  const full = () => void warm.response(chainOf(freshStages()));
-  const variants = Array.from({ length: 8 }, (_, k) => chainOf(editedStages(1 + 0.01 * k)));
-  // Each edit is new to the sampler: a stage object of its own.
-  const edit = () => void warm.response(chainOf(editedStages(1 + Math.random())));
-  timed(300, full);
-  timed(300, edit);
-  warm.response(variants[0]!);
   const numpy = startNumpy(root);
-  const gainDb = new Sampler(FREQS_HZ).response(chain).gainDb;
-  if (numpy !== undefined) sameGain(JSON.parse(await numpy.ask("gain")), gainDb, "NumPy");
-  sameGain(mathjsGain(), gainDb, "mathjs");
-  const times = { full: [] as number[], edit: [] as number[], numpy: [] as number[], mathjs: [] as number[] };
-  await numpy?.ask("20");
-  for (let round = 0; round < ROUNDS; round++) {
-    times.full.push(...timed(RUNS_A_ROUND, full));
-    if (numpy !== undefined) {
-      const { min, median } = JSON.parse(await numpy.ask(String(RUNS_A_ROUND)));
-      times.numpy.push(min, median);
-    }
-    times.edit.push(...timed(RUNS_A_ROUND, edit));
-    if (round % 4 === 0) times.mathjs.push(...timed(1, () => void mathjsGain()));
+  try {
+    await expectSame(numpy);
+    return rowsOf(await race(numpy), numpy?.version);
+  } finally {
+    numpy?.stop();
   }
-  numpy?.stop();
-  return rowsOf(times);
 }
 
-function rowsOf(times: Record<"full" | "edit" | "numpy" | "mathjs", number[]>): readonly Row[] {
-  const full = timingOf(times.full);
-  const edit = timingOf(times.edit);
-  const numpy = timingOf(times.numpy);
-  const mathjs = timingOf(times.mathjs);
-  const against = (name: string, other: number, bar: number): Row => ({
-    what: `full evaluation, 12 loaded LC sections x 1000, against ${name}`,
-    measured: Number.isNaN(other)
-      ? "-"
-      : `${ms(full.median)} to ${ms(other)}: ${(other / full.median).toFixed(1)} times`,
-    bar: `at least ${bar} times`,
-    met: Number.isNaN(other) ? undefined : other / full.median >= bar,
+// The grid stands, as with the other contenders; every stage is new to it.
+const sampler = new Sampler(FREQS_HZ);
+const full = () => sampler.response(chainOf(freshStages()));
+let edits = 0;
+/** A part of one stage has a value that has not been seen before. */
+const edit = () => sampler.response(chainOf(editedStages(1 + ++edits * 1e-6)));
+
+interface Times {
+  readonly full: number[][];
+  readonly edit: number[][];
+  readonly matrices: number[][];
+  readonly pair: number[][];
+  readonly objects: number[][];
+}
+
+/** The contenders take turns, so that whatever else the machine does falls on all of them. */
+async function race(numpy: Numpy | undefined): Promise<Times> {
+  const times: Times = { full: [], edit: [], matrices: [], pair: [], objects: [] };
+  timed(400, full);
+  timed(400, edit);
+  timed(1, complexObjectsResponse);
+  for (let round = 0; round < ROUNDS; round++) {
+    times.objects.push(round % OBJECTS_EVERY === 0 ? timed(1, complexObjectsResponse) : []);
+    times.full.push(timed(RUNS, full));
+    times.matrices.push([...((await numpy?.time("matrices", RUNS)) ?? [])]);
+    times.edit.push(timed(RUNS, edit));
+    times.pair.push([...((await numpy?.time("pair", RUNS)) ?? [])]);
+  }
+  return times;
+}
+
+function rowsOf({ full, edit, matrices, pair, objects }: Times, version: string | undefined): readonly Row[] {
+  const times = (name: string, rounds: readonly number[][], found = "", rest: Partial<Row> = {}): Row => ({
+    what: name,
+    least: ms(least(rounds.flat())),
+    median: ms(median(rounds.flat())),
+    found,
+    ...rest,
   });
+  const slower = (name: string, rounds: readonly number[][], bar?: number): Row => {
+    const ratio = ratioOf(rounds, full);
+    const verdict = bar === undefined ? {} : { bar: `at least ${bar} times`, met: ratio >= bar };
+    return times(name, rounds, `${ratio.toFixed(1)} times`, verdict);
+  };
   return [
-    against("NumPy", numpy.median, 4),
-    against("mathjs complex objects", mathjs.median, 500),
-    {
-      what: "one part edited, to new gain and phase",
-      measured: `median ${ms(edit.median)}, least ${ms(edit.min)}`,
+    times("full evaluation, 12 loaded second-order sections × 1000", full),
+    ...(version === undefined
+      ? [notMeasured("the same in NumPy", "at least 4 times")]
+      : [
+          slower(`the same in NumPy ${version}, 2×2 matrices`, matrices, 4),
+          slower(`the same in NumPy ${version}, only V and I`, pair),
+        ]),
+    slower("the same in mathjs complex objects", objects, 500),
+    times("one part edited, to new gain and phase", edit, ms(median(edit.flat())), {
       bar: "under 200 µs",
-      met: edit.median < 0.2,
-    },
+      met: median(edit.flat()) < 0.2,
+    }),
   ];
 }
 
-/** The contenders have to compute the same thing. */
-function sameGain(found: readonly number[], expected: ArrayLike<number>, name: string): void {
-  const worst = Math.max(...found.map((value, k) => Math.abs(value - (expected[k] as number))));
-  if (!(worst < 1e-8)) throw new Error(`${name} differs by ${worst} dB`);
+/** Of the medians of one round after the other, the middle one: what disturbs a round falls on both. */
+function ratioOf(slow: readonly number[][], fast: readonly number[][]): number {
+  const ratios = slow.flatMap((round, k) => (round.length === 0 ? [] : [median(round) / median(fast[k])]));
+  return median(ratios);
 }
 
-/** The chain with complex objects: the pair (V, I) carried from the load to the source at one frequency after the other. */
-function mathjsGain(): number[] {
-  const times = (p: Complex | number, q: Complex | number) => multiply(p, q) as Complex;
-  const plus = (p: Complex | number, q: Complex | number) => add(p, q) as Complex;
-  return Array.from(FREQS_HZ, (freqHz) => {
-    const s = complex(0, 2 * Math.PI * freqHz);
-    let v: Complex = complex(1, 0);
-    let i: Complex = complex(1 / LOAD_OHM, 0);
-    for (const { L, Rw, C, Rc } of [...SECTIONS].reverse()) {
-      i = plus(i, divide(v, plus(Rc, divide(1, times(s, C)) as Complex)) as Complex);
-      v = plus(v, times(plus(Rw, times(s, L)), i));
-    }
-    const h = divide(1, plus(v, times(SOURCE_OHM, i))) as Complex;
-    return 20 * Math.log10(abs(h) as unknown as number);
-  });
-}
-
-interface Numpy {
-  readonly ask: (line: string) => Promise<string>;
-  readonly stop: () => void;
-}
-
-/** NumPy in a process of its own, warm; undefined where there is none. */
-function startNumpy(root: string): Numpy | undefined {
-  if (spawnSync("python3", ["-c", "import numpy"]).status !== 0) return undefined;
-  const child: ChildProcess = spawn("python3", [join(root, "test/bench/numpy_chain.py")], {
-    stdio: ["pipe", "pipe", "inherit"],
-    env: { ...process.env, OMP_NUM_THREADS: "1" },
-  });
-  const lines = createInterface({ input: child.stdout! })[Symbol.asyncIterator]();
-  const task = { freqsHz: [...FREQS_HZ], sections: SECTIONS, sourceOhm: SOURCE_OHM, loadOhm: LOAD_OHM };
-  child.stdin?.write(`${JSON.stringify(task)}\n`);
-  return {
-    ask: async (line) => {
-      child.stdin?.write(`${line}\n`);
-      return String((await lines.next()).value);
-    },
-    stop: () => void child.stdin?.end(),
-  };
+/** A race of contenders that do not compute the same thing would say nothing. */
+async function expectSame(numpy: Numpy | undefined): Promise<void> {
+  const { gainDb, phaseDeg } = full();
+  const others = [complexObjectsResponse()];
+  if (numpy !== undefined) others.push(await numpy.response("matrices"), await numpy.response("pair"));
+  for (const other of others) {
+    const apartDb = Math.max(...other.gainDb.map((value, k) => Math.abs(value - gainDb[k])));
+    const apartDeg = Math.max(...other.phaseDeg.map((value, k) => Math.abs(value - phaseDeg[k])));
+    if (!(apartDb < 1e-9 && apartDeg < 1e-9))
+      throw new Error(`the contenders are ${apartDb} dB and ${apartDeg}° apart`);
+  }
 }

@@ -1,49 +1,20 @@
-/** Times in ms. */
-export interface Timing {
-  readonly min: number;
-  readonly median: number;
-}
-
-export function timingOf(times: readonly number[]): Timing {
-  const sorted = [...times].sort((a, b) => a - b);
-  return { min: sorted[0] ?? Number.NaN, median: sorted[Math.floor(sorted.length / 2)] ?? Number.NaN };
-}
-
-/** So many runs of `work`, each timed by itself. */
-export function timed(runs: number, work: (run: number) => void): number[] {
-  return Array.from({ length: runs }, (_, run) => {
+/** So many runs of `work`, each timed by itself, in ms. */
+export function timed(runs: number, work: () => void): number[] {
+  return Array.from({ length: runs }, () => {
     const start = performance.now();
-    work(run);
+    work();
     return performance.now() - start;
   });
 }
 
-/** One line of the result. */
-export interface Row {
-  readonly what: string;
-  readonly measured: string;
-  readonly bar: string;
-  /** Undefined where it could not be measured here. */
-  readonly met: boolean | undefined;
-}
+export const least = (values: readonly number[]): number => Math.min(...values);
 
-export function report(rows: readonly Row[]): string {
-  const cells = rows.map(({ what, measured, bar, met }) => [
-    what,
-    measured,
-    bar,
-    met === undefined ? "not measured" : met ? "met" : "NOT MET",
-  ]);
-  const all = [["what", "measured", "bar", ""], ...cells];
-  const widths = [0, 1, 2, 3].map((k) => Math.max(...all.map((row) => (row[k] as string).length)));
-  return all
-    .map((row) =>
-      row
-        .map((cell, k) => cell.padEnd(widths[k] as number))
-        .join("  ")
-        .trimEnd(),
-    )
-    .join("\n");
+export const median = (values: readonly number[]): number => quantile(values, 0.5);
+
+/** The value that this part of all is not above. */
+export function quantile(values: readonly number[], part: number): number {
+  const ascending = [...values].sort((a, b) => a - b);
+  return ascending[Math.max(0, Math.ceil(part * ascending.length) - 1)] ?? Number.NaN;
 }
 
 export const ms = (value: number): string =>
