@@ -1,8 +1,8 @@
+import { converterEdges, gainLimitLines } from "../chart/chain-overlays.ts";
 import { drawChart, drawFrequencyAxis } from "../chart/chart.ts";
-import type { LimitLine, Overlays, VerticalEdge } from "../chart/overlays.ts";
+import type { Overlays, VerticalEdge } from "../chart/overlays.ts";
 import { columnOfFrequency, type FrequencyScale } from "../chart/scale.ts";
 import type { Span } from "../chart/spans.ts";
-import { readAt } from "../core/response/exact.ts";
 import { HALF_POWER_DB } from "../core/response/landmarks.ts";
 import type { Charset } from "../core/units/format.ts";
 import type { Layout } from "../editor/layout.ts";
@@ -55,31 +55,16 @@ function gainOverlays(state: EditorState, traces: ShownTraces): Overlays {
   return {
     ghost: traces.ghost?.gainDb,
     edges: edgesOf(state),
-    limits: overlays.limits ? limitsOf(state) : [],
+    limits: overlays.limits ? gainLimitLines(chainOnCharts(state)) : [],
     levels: overlays["half power"] ? [greatest(traces.chain.gainDb) + HALF_POWER_DB] : [],
   };
 }
 
-function edgesOf({ overlays, ...state }: EditorState): readonly VerticalEdge[] {
-  const { converter } = chainOnCharts(state as EditorState);
-  if (converter === undefined) return [];
-  const { rateHz, bandHz } = converter;
-  return [
-    ...(overlays["folding edge"] ? [{ freqHz: rateHz / 2, kind: "fold" as const }] : []),
-    ...(overlays["band edge"] && bandHz !== undefined ? [{ freqHz: bandHz, kind: "band" as const }] : []),
-  ];
-}
-
-/** Bounds on gain in absolute dB, those relative to a frequency moved by the gain there. */
-function limitsOf(state: EditorState): readonly LimitLine[] {
-  const { chain, limits } = chainOnCharts(state);
-  return limits
-    .filter(({ quantity }) => quantity === "gain")
-    .map(({ fromHz, toHz, atLeast, atMost, reHz }) => {
-      const zeroDb = reHz === undefined ? 0 : readAt(chain, reHz).gainDb;
-      const moved = (bound: number | undefined) => (bound === undefined ? undefined : bound + zeroDb);
-      return { fromHz, toHz, atLeast: moved(atLeast), atMost: moved(atMost) };
-    });
+function edgesOf(state: EditorState): readonly VerticalEdge[] {
+  const { overlays } = state;
+  return converterEdges(chainOnCharts(state)).filter(({ kind }) =>
+    kind === "fold" ? overlays["folding edge"] : overlays["band edge"],
+  );
 }
 
 const greatest = (values: ArrayLike<number>): number =>

@@ -1,10 +1,9 @@
-import { frequencyTicks } from "../../chart/frequency-ticks.ts";
+import { converterEdges, gainLimitLines } from "../../chart/chain-overlays.ts";
+import { drawChart, drawFrequencyAxis } from "../../chart/chart.ts";
 import { glyphsOf } from "../../chart/glyphs.ts";
-import { columnOfFrequency, type FrequencyScale, LABEL_COLUMNS, plotColumns } from "../../chart/scale.ts";
-import { Canvas } from "../../chart/spans.ts";
-import { drawTrace, rowOf } from "../../chart/trace-lines.ts";
+import { plotColumns } from "../../chart/scale.ts";
+import type { Span } from "../../chart/spans.ts";
 import { TraceMaker } from "../../chart/traces.ts";
-import { gainAxis, phaseAxis, type ValueAxis } from "../../chart/value-axis.ts";
 import type { Charset } from "../../core/units/format.ts";
 import type { ResolvedChain } from "../../document/resolve.ts";
 
@@ -12,68 +11,47 @@ const GAIN_ROWS = 13;
 const PHASE_ROWS = 9;
 
 /** Gain and phase, one above the other over one logarithmic frequency axis. */
-export function chartLines(
-  { chain, sweep, converter }: ResolvedChain,
-  columns: number,
-  charset: Charset,
-): readonly string[] {
+export function chartLines(resolved: ResolvedChain, columns: number, charset: Charset): readonly string[] {
+  const { chain, sweep } = resolved;
   const scale = { fromHz: sweep.fromHz, toHz: sweep.toHz, columns: plotColumns(columns) };
   const { gainDb, phaseDeg, phaseIsWrapped } = new TraceMaker().traces(chain, scale);
-  const foldHz = converter === undefined ? undefined : converter.rateHz / 2;
-  const chart = (values: Float64Array, axis: ValueAxis, rows: number) =>
-    drawn({ values, axis, rows, scale, foldHz, charset });
+  const shared = { columns, scale, charset };
+  const edges = converterEdges(resolved);
+  const limits = gainLimitLines(resolved);
+  const gain = drawChart({
+    ...shared,
+    quantity: "gain",
+    rows: GAIN_ROWS,
+    values: gainDb,
+    overlays: { edges, limits },
+  });
+  const phase = drawChart({
+    ...shared,
+    quantity: "phase",
+    rows: PHASE_ROWS,
+    values: phaseDeg,
+    overlays: { edges },
+  });
   return [
-    foldHz === undefined ? "gain in dB" : `gain in dB (${glyphsOf(charset).fold} half the sample rate)`,
-    ...chart(gainDb, gainAxis(GAIN_ROWS, [gainDb]), GAIN_ROWS),
-    `phase in degrees${phaseIsWrapped ? ", -180 to 180," : ""} over frequency in Hz`,
-    ...chart(phaseDeg, phaseAxis(PHASE_ROWS, [phaseDeg]), PHASE_ROWS),
-    frequencyLabels(scale),
+    `gain${legend(resolved, charset)}`,
+    ...gain.map(textOf),
+    `phase${phaseIsWrapped ? ", -180 to 180 degrees" : ""}`,
+    ...phase.map(textOf),
+    ...drawFrequencyAxis(shared).map(textOf),
   ];
 }
 
-interface Chart {
-  readonly values: Float64Array;
-  readonly axis: ValueAxis;
-  readonly rows: number;
-  readonly scale: FrequencyScale;
-  readonly foldHz: number | undefined;
-  readonly charset: Charset;
-}
+const textOf = (spans: readonly Span[]): string => spans.map(({ text }) => text).join("");
 
-function drawn({ values, axis, rows, scale, foldHz, charset }: Chart): readonly string[] {
+/** What is laid over the gain, by its sign. */
+function legend({ converter, limits }: ResolvedChain, charset: Charset): string {
   const glyphs = glyphsOf(charset);
-  const rowScale = { low: axis.low, high: axis.high, rows };
-  const canvas = new Canvas(rows, scale.columns);
-  const foldColumn = foldHz === undefined ? undefined : columnOfFrequency(scale, foldHz);
-  if (foldColumn !== undefined) {
-    for (let row = 0; row < rows; row++) canvas.put(row, foldColumn, glyphs.fold, "fold");
-  }
-  drawTrace(canvas, rowScale, values, glyphs, "trace");
-  const labels = new Map(axis.ticks.map((value) => [rowOf(rowScale, value), String(value)]));
-  const lines = canvas.spans().map((spans, row) => {
-    const label = labels.get(row);
-    const edge = label === undefined ? glyphs.axis : glyphs.axisTick;
-    return (label ?? "").padStart(LABEL_COLUMNS) + edge + spans.map(({ text }) => text).join("");
-  });
-  return [...lines, floor(scale, charset)];
-}
-
-/** The frequency axis with its marks. */
-function floor(scale: FrequencyScale, charset: Charset): string {
-  const glyphs = glyphsOf(charset);
-  const marks = new Map(frequencyTicks(scale).map(({ column, kind }) => [column, glyphs[kind]]));
-  const cells = Array.from({ length: scale.columns }, (_, column) => marks.get(column) ?? glyphs.floor);
-  return " ".repeat(LABEL_COLUMNS) + glyphs.corner + cells.join("");
-}
-
-/** Each label under its mark, left out where it would run into the one before. */
-function frequencyLabels(scale: FrequencyScale): string {
-  const end = LABEL_COLUMNS + 1 + scale.columns;
-  let line = "";
-  for (const { column, label } of frequencyTicks(scale)) {
-    const centred = LABEL_COLUMNS + 1 + column - Math.floor(label.length / 2);
-    const from = Math.min(centred, end - label.length);
-    if (label !== "" && from > line.length) line = line.padEnd(from) + label;
-  }
-  return line;
+  const onGain = limits.filter(({ quantity }) => quantity === "gain");
+  const entries = [
+    ...(converter === undefined ? [] : [`${glyphs.fold} half the sample rate`]),
+    ...(converter?.bandHz === undefined ? [] : [`${glyphs.bandEdge} band edge`]),
+    ...(onGain.some(({ atMost }) => atMost !== undefined) ? [`${glyphs.atMost} at most`] : []),
+    ...(onGain.some(({ atLeast }) => atLeast !== undefined) ? [`${glyphs.atLeast} at least`] : []),
+  ];
+  return entries.length === 0 ? "" : `  (${entries.join(", ")})`;
 }
