@@ -46,9 +46,9 @@ describe("halfpower CHAIN without a terminal", () => {
     const lines = linesOf((await run([fileOf(lowpass())])).stdout);
     const gain = lines.indexOf("gain");
     const phase = lines.indexOf("phase");
-    expect(lines[gain + 1]).toMatch(/^ {6}0┤─+╮ *$/);
+    expect(lines[gain + 1]).toMatch(/^ {6}0┤─+╮[ ·]*$/);
     expect(lines.slice(gain, phase).some((line) => /^ {4}-40┤/.test(line))).toBe(true);
-    expect(lines[phase + 1]).toMatch(/^ {6}0┤─+╮ *$/);
+    expect(lines[phase + 1]).toMatch(/^ {6}0┤─+╮[ ·]*$/);
     expect(lines.slice(phase).some((line) => /^ {4}-90┤.*╰─+$/.test(line))).toBe(true);
     expect(lines.some((line) => /^ +Hz 1 +10 +100 +1k +10k +100k +1M$/.test(line))).toBe(true);
   });
