@@ -107,7 +107,15 @@ export async function openStation({ size, home, chain = "strain-bridge", env = {
         )
         .join(" "),
     /** Cells that differ from the frame that was meant; empty where the screen is right. */
-    stale: () => emulator.staleCells(terminal.stdout.frame),
+    stale: async () => {
+      for (;;) {
+        await settled();
+        const { frame } = terminal.stdout;
+        const cells = await emulator.staleCells(frame);
+        // What is worked out beside the keys can bring a new frame at any time.
+        if (terminal.stdout.frame === frame) return cells;
+      }
+    },
     close: () => terminal.close(),
   };
 }

@@ -42,21 +42,22 @@ const SIZES = [
 describe("500 random keys", () => {
   it("never throw and never leave stale cells, and undo brings back the starting chain exactly", async () => {
     const keys = fc.array(key, { minLength: 500, maxLength: 500 });
-    let most = 0;
+    let changes = 0;
     await fc.assert(
       fc.asyncProperty(keys, fc.constantFrom(...SIZES), async (pressed, size) => {
         const running = await openStation({ home, size, chain: "strain-bridge" });
         station = running;
         const start = running.state().document;
         for (const [k, key] of pressed.entries()) {
+          const before = running.state().document;
           running.emulator.press(key);
+          if (running.state().document !== before) changes += 1;
           if (k % 25 === 0) {
             await running.settled();
             expect(await running.stale()).toEqual([]);
           }
         }
         await running.settled();
-        most = Math.max(most, running.state().history.past.length);
         // Out of whatever is open, then all the way back.
         await running.press("escape", "escape", "escape");
         while (running.state().history.past.length > 0) await running.press("u");
@@ -67,6 +68,6 @@ describe("500 random keys", () => {
       { numRuns: 4, seed: 20261201, endOnFailure: true },
     );
     // The keys did change the chain.
-    expect(most).toBeGreaterThan(20);
+    expect(changes).toBeGreaterThan(200);
   }, 120_000);
 });
