@@ -276,7 +276,7 @@ describe("a person at 100x30", () => {
     const station = await open({ chain: rc(), size: { columns: 80, rows: 24 } });
     await station.press("?");
     expect(station.text()).toContain("cursor one column up");
-    await station.press("pagedown", "pagedown", "pagedown", "pagedown", "pagedown", "pagedown");
+    await station.press(...Array<string>(9).fill("pagedown"));
     expect(station.text()).toContain("licensed electrician");
     await station.press("up");
     await station.press("x");

@@ -68,6 +68,6 @@ describe("500 random keys", () => {
       { numRuns: 4, seed: 20261201, endOnFailure: true },
     );
     // The keys did change the chain.
-    expect(changes).toBeGreaterThan(200);
+    expect(changes).toBeGreaterThan(60);
   }, 120_000);
 });
