@@ -37,3 +37,6 @@ export const chainOf = (stages: readonly ChainStage[]): Chain =>
 /** The middle section with another capacitor. */
 export const editedStages = (factor: number): readonly ChainStage[] =>
   STAGES.map((stage, k) => (k === 6 ? stageOf({ ...SECTIONS[6], C: SECTIONS[6].C * factor }, 6) : stage));
+
+/** How the others multiply the chain: whole 2×2 matrices, or only the pair of voltage and current. */
+export type Form = "matrices" | "pair";

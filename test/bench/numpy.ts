@@ -1,17 +1,14 @@
 import { type ChildProcess, spawn, spawnSync } from "node:child_process";
 import { join } from "node:path";
 import { createInterface } from "node:readline";
-import { FREQS_HZ, LOAD_OHM, SECTIONS, SOURCE_OHM } from "./chain.ts";
-
-/** How NumPy multiplies the chain: whole 2×2 matrices, or only the pair of voltage and current. */
-export type NumpyForm = "matrices" | "pair";
+import { type Form, FREQS_HZ, LOAD_OHM, SECTIONS, SOURCE_OHM } from "./chain.ts";
 
 /** NumPy on the benchmark's chain, warm and in a process of its own; see numpy_chain.py. */
 export interface Numpy {
   readonly version: string;
   /** Times of so many evaluations in ms. */
-  time(form: NumpyForm, runs: number): Promise<readonly number[]>;
-  response(form: NumpyForm): Promise<{ readonly gainDb: number[]; readonly phaseDeg: number[] }>;
+  time(form: Form, runs: number): Promise<readonly number[]>;
+  response(form: Form): Promise<{ readonly gainDb: number[]; readonly phaseDeg: number[] }>;
   stop(): void;
 }
 

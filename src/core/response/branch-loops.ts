@@ -2,7 +2,8 @@ import type { BranchCoefficients } from "./samples.ts";
 import { WORKING, type Working } from "./working.ts";
 
 /**
- * Branches of R, L and C, the innermost loops of all: what is asked is asked outside them, coefficients lie in locals.
+ * Branches of R, L and C, the innermost loops of all: what is asked is asked outside them, coefficients lie in
+ * locals, and the division is under way while the products are made.
  * The two functions are alike but for V and I changing places; see `working.ts` for why they are not one.
  */
 function branchLoops({ omega, inverseOmega, vRe, vIm, iRe, iIm }: Working) {
@@ -12,11 +13,9 @@ function branchLoops({ omega, inverseOmega, vRe, vIm, iRe, iIm }: Working) {
       const square = real * real;
       for (let k = 0; k < count; k++) {
         const x = omega[k] * rising - inverseOmega[k] * falling;
-        const size = 1 / (square + x * x);
-        const r = real * size;
-        const b = x * size;
-        vRe[k] += r * iRe[k] + b * iIm[k];
-        vIm[k] += r * iIm[k] - b * iRe[k];
+        const over = 1 / (square + x * x);
+        vRe[k] += (real * iRe[k] + x * iIm[k]) * over;
+        vIm[k] += (real * iIm[k] - x * iRe[k]) * over;
       }
     } else if (falling === 0) {
       for (let k = 0; k < count; k++) {
@@ -39,11 +38,9 @@ function branchLoops({ omega, inverseOmega, vRe, vIm, iRe, iIm }: Working) {
       const square = real * real;
       for (let k = 0; k < count; k++) {
         const x = omega[k] * rising - inverseOmega[k] * falling;
-        const size = 1 / (square + x * x);
-        const g = real * size;
-        const b = x * size;
-        iRe[k] += g * vRe[k] + b * vIm[k];
-        iIm[k] += g * vIm[k] - b * vRe[k];
+        const over = 1 / (square + x * x);
+        iRe[k] += (real * vRe[k] + x * vIm[k]) * over;
+        iIm[k] += (real * vIm[k] - x * vRe[k]) * over;
       }
     } else if (falling === 0) {
       for (let k = 0; k < count; k++) {

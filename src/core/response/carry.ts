@@ -1,8 +1,7 @@
 import { addSeries, addShunt } from "./branch-loops.ts";
 import { gain, phase } from "./polar-loops.ts";
 import { keepPairInRange, keepProductInRange } from "./range-loops.ts";
-import type { ComplexArray } from "./sample-rational.ts";
-import type { BranchCoefficients, Step } from "./samples.ts";
+import type { Step } from "./samples.ts";
 import { clearCurrent, start } from "./start-loops.ts";
 import { addSampledSeries, addSampledShunt, carryMatrix, multiply, multiplySection } from "./step-loops.ts";
 import { BLOCK_SIZE } from "./working.ts";
@@ -20,7 +19,7 @@ export function carryAll(
   gainDb: Float64Array,
   phaseDeg: Float64Array,
 ): void {
-  const changesProduct = steps.some(({ form }) => form !== "series" && form !== "shunt");
+  const changesProduct = steps.some(changesN);
   const keepInRange = (count: number) => {
     keepPairInRange(count);
     if (changesProduct) keepProductInRange(count);
@@ -41,12 +40,16 @@ export function carryAll(
 function take(step: Step, at: number, count: number): void {
   switch (step.form) {
     case "series":
-      if (isSampled(step.by)) addSampledSeries(at, count, step.by);
-      else addSeries(count, step.by);
+      addSeries(count, step.branch);
+      break;
+    case "sampled series":
+      addSampledSeries(at, count, step.impedance);
       break;
     case "shunt":
-      if (isSampled(step.by)) addSampledShunt(at, count, step.by);
-      else addShunt(count, step.by);
+      addShunt(count, step.branch);
+      break;
+    case "sampled shunt":
+      addSampledShunt(at, count, step.admittance);
       break;
     case "isolation":
       clearCurrent();
@@ -64,4 +67,4 @@ function take(step: Step, at: number, count: number): void {
   }
 }
 
-const isSampled = (by: BranchCoefficients | ComplexArray): by is ComplexArray => "re" in by;
+const changesN = ({ form }: Step): boolean => form === "section" || form === "factor" || form === "matrix";

@@ -15,9 +15,11 @@ import { type ComplexArray, constant, empty, samplePolynomial, sampleRational } 
  */
 export type Step =
   /** `V += Z·I` */
-  | { readonly form: "series"; readonly by: BranchCoefficients | ComplexArray }
+  | { readonly form: "series"; readonly branch: BranchCoefficients }
+  | { readonly form: "sampled series"; readonly impedance: ComplexArray }
   /** `I += Y·V` */
-  | { readonly form: "shunt"; readonly by: BranchCoefficients | ComplexArray }
+  | { readonly form: "shunt"; readonly branch: BranchCoefficients }
+  | { readonly form: "sampled shunt"; readonly admittance: ComplexArray }
   /** `I = 0`: no current flows back from output to input. */
   | { readonly form: "isolation" }
   /** `n *= num`, `V *= den`, each of at most the second degree; only before an isolation. */
@@ -64,15 +66,15 @@ export function sampleElement(element: Element, omega: Float64Array): readonly S
 }
 
 function sampleSeries({ num, den, omega0 }: Rational, omega: Float64Array): Step {
-  const by = branchCoefficients(num, den, omega0);
-  if (by !== undefined) return { form: "series", by };
+  const branch = branchCoefficients(num, den, omega0);
+  if (branch !== undefined) return { form: "series", branch };
   const [b, d] = [samplePolynomial(num, omega0, omega), samplePolynomial(den, omega0, omega)];
   return { form: "matrix", n: d, a: d, b, c: constant(0, omega.length), d };
 }
 
 function sampleShunt({ num, den, omega0 }: Rational, omega: Float64Array): Step {
-  const by = branchCoefficients(den, num, omega0);
-  if (by !== undefined) return { form: "shunt", by };
+  const branch = branchCoefficients(den, num, omega0);
+  if (branch !== undefined) return { form: "shunt", branch };
   const [a, c] = [samplePolynomial(num, omega0, omega), samplePolynomial(den, omega0, omega)];
   return { form: "matrix", n: a, a, b: constant(0, omega.length), c, d: a };
 }
@@ -128,15 +130,24 @@ function sampleLine(line: DistributedElement, omega: Float64Array): Step {
 function sampleIsolating(element: IsolatingElement, omega: Float64Array): readonly Step[] {
   const { inputAdmittance, transfer, outputImpedance } = element;
   return [
-    ...(inputAdmittance ? [{ form: "shunt" as const, by: samplePort(inputAdmittance, omega) }] : []),
+    ...(inputAdmittance ? [sampleInput(inputAdmittance, omega)] : []),
     ...sampleTransfer(transfer, omega),
     { form: "isolation" },
-    ...(outputImpedance ? [{ form: "series" as const, by: samplePort(outputImpedance, omega) }] : []),
+    ...(outputImpedance ? [sampleOutput(outputImpedance, omega)] : []),
   ];
 }
 
-const samplePort = (port: Rational, omega: Float64Array): BranchCoefficients | ComplexArray =>
-  branchCoefficients(port.num, port.den, port.omega0) ?? sampleRational(port, omega);
+function sampleInput(admittance: Rational, omega: Float64Array): Step {
+  const branch = branchCoefficients(admittance.num, admittance.den, admittance.omega0);
+  if (branch !== undefined) return { form: "shunt", branch };
+  return { form: "sampled shunt", admittance: sampleRational(admittance, omega) };
+}
+
+function sampleOutput(impedance: Rational, omega: Float64Array): Step {
+  const branch = branchCoefficients(impedance.num, impedance.den, impedance.omega0);
+  if (branch !== undefined) return { form: "series", branch };
+  return { form: "sampled series", impedance: sampleRational(impedance, omega) };
+}
 
 function sampleTransfer(transfer: IsolatingElement["transfer"], omega: Float64Array): readonly Step[] {
   if (transfer.type === "irrational") return [{ form: "factor", by: sampleIrrational(transfer, omega) }];
