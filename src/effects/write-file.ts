@@ -2,7 +2,6 @@
  * Own code and no library: the ones there are for Node write with a single call and do not look at how much of it
  * was taken, so that a disk that fills up leaves a file cut short in place of the whole one.
  */
-import { randomBytes } from "node:crypto";
 import {
   accessSync,
   closeSync,
@@ -21,6 +20,7 @@ import {
 } from "node:fs";
 import { dirname, join, resolve } from "node:path";
 import { codeOf } from "./file-problem.ts";
+import { uniqueWord } from "./unique-word.ts";
 
 const PERMISSION_BITS = 0o7777;
 const MOST_LINKS = 40;
@@ -44,7 +44,7 @@ export function writeWhole(path: string, text: string, options: WriteOptions = {
   // A file marked as read-only is not written, though its folder would allow it to be exchanged.
   if (before !== undefined) accessSync(target, constants.W_OK);
   const folder = dirname(target);
-  const temporary = join(folder, `.halfpower-${process.pid}-${randomBytes(6).toString("hex")}.tmp`);
+  const temporary = join(folder, `.halfpower-${process.pid}-${uniqueWord()}.tmp`);
   try {
     fill(temporary, text, before, options.mode ?? 0o666);
     if (options.stillWanted?.() === false) return false;
