@@ -102,7 +102,7 @@ export async function openStation({ size, home, chain = "strain-bridge", env = {
         .map((row) =>
           row
             .split(/[┤│]/)[0]
-            ?.replace(/-?[\d.]*$/, "")
+            ?.replace(/ *(-?[\d.]+|dB|deg)?$/, "")
             .trim(),
         )
         .join(" "),

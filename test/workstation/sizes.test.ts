@@ -58,7 +58,7 @@ describe.each(SIZES)("a morning's work at $columns×$rows", (size) => {
     await running.type(home.path("bridge.chain.json"));
     await press("enter");
     // The step back is unsaved work, and is asked about.
-    expect(running.side()).toContain("has unsaved");
+    expect(running.side()).toContain("has unsaved work");
     await press("d");
     await expect.poll(() => running.state().document.stages[1]?.parts?.C).toBe("470n");
     expect(running.state().document).toEqual(saved);
