@@ -11,10 +11,17 @@ const onlyOneColumn = new RegExp(`^${oneColumn}*$`);
 /** Kana, ideographs, Hangul syllables and full-width forms: two columns everywhere. */
 const surelyTwoColumns = /^[\u3041-\u3096\u30a1-\u30fa\u3400-\u4dbf\u4e00-\u9fff\uac00-\ud7a3\uff01-\uff60]$/;
 
-const segmenter = new Intl.Segmenter();
+/** Made when it is wanted: most screens hold nothing that it is needed for. */
+let segmenter: Intl.Segmenter | undefined;
 
 /** Whether terminals agree on the width of this cluster. After one they may not agree on, the cursor is in doubt. */
 export const isSureWidth = (cluster: string): boolean =>
+  isPrintableAscii(cluster) || isSureOtherWidth(cluster);
+
+const isPrintableAscii = (cluster: string): boolean =>
+  cluster.length === 1 && cluster >= " " && cluster <= "~";
+
+const isSureOtherWidth = (cluster: string): boolean =>
   onlyOneColumn.test(cluster) ? cluster.length === 1 : surelyTwoColumns.test(cluster);
 
 /** The characters of a text as they take up cells, with their widths. Those that take up none are left out. */
@@ -23,6 +30,7 @@ export function* clustersOf(text: string): Generator<{ cluster: string; width: 1
     for (const cluster of text) yield { cluster, width: 1 };
     return;
   }
+  segmenter ??= new Intl.Segmenter();
   for (const { segment } of segmenter.segment(text)) {
     const width = stringWidth(segment);
     if (width > 0) yield { cluster: segment, width: width === 1 ? 1 : 2 };

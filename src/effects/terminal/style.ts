@@ -48,8 +48,32 @@ export interface StyleRules {
   readonly colour: boolean;
 }
 
+/** Few styles and few changes between them come up, each a thousand times a frame: what was worked out is kept. */
+class Kept<T> {
+  readonly #values = new Map<string, T>();
+
+  of(key: string, make: () => T): T {
+    const known = this.#values.get(key);
+    if (known !== undefined) return known;
+    // Only a stream of ever new colours gets this far.
+    if (this.#values.size >= MOST_KEPT) this.#values.clear();
+    const made = make();
+    this.#values.set(key, made);
+    return made;
+  }
+}
+
+const MOST_KEPT = 1000;
+const appliedStyles = new Kept<Style>();
+const styleChanges = new Kept<string>();
+
 /** The style after `CSI parameters m`. Codes that are none of ours change nothing. */
-export function applySgr(style: Style, parameters: string, rules: StyleRules): Style {
+export const applySgr = (style: Style, parameters: string, rules: StyleRules): Style =>
+  appliedStyles.of(`${style.key} ${parameters} ${rules.attributes} ${rules.colour}`, () =>
+    appliedSgr(style, parameters, rules),
+  );
+
+function appliedSgr(style: Style, parameters: string, rules: StyleRules): Style {
   let { attributes: mask, foreground, background } = style;
   const codes = parameters.split(";");
   for (let index = 0; index < codes.length; index += 1) {
@@ -89,6 +113,12 @@ function applyAttribute(mask: AttributeMask, code: number): AttributeMask {
 /** The shortest sequence that turns one style into the other; empty where they are the same. */
 export function styleChange(from: Style, to: Style, partialReset: boolean): string {
   if (from.key === to.key) return "";
+  return styleChanges.of(`${from.key} ${to.key} ${partialReset}`, () =>
+    shortestChange(from, to, partialReset),
+  );
+}
+
+function shortestChange(from: Style, to: Style, partialReset: boolean): string {
   if (to.key === plain.key) return "\u001b[m";
   const afresh = `\u001b[${["0", ...onCodes(to.attributes), to.foreground, to.background].filter(Boolean).join(";")}m`;
   if (!partialReset) return afresh;
