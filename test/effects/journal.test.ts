@@ -169,22 +169,19 @@ describe("isRunning", () => {
     expect(isRunning(identityOf(1))).toBe(true);
   });
 
-  it("takes one that has ended and was not yet waited for as ended", () => {
-    // The shell starts a child, is replaced by a program that never waits, and tells the child's number.
-    const parent = spawn("/bin/sh", ["-c", "/bin/true & echo $!; exec sleep 60"], {
+  it("takes one that has ended and was not yet waited for as ended", async () => {
+    // The shell starts a child, is replaced by a program that never waits, and only then does the child end.
+    const parent = spawn("/bin/sh", ["-c", "sleep 0.5 & echo $!; exec sleep 60"], {
       stdio: ["ignore", "pipe", "inherit"],
     });
-    return new Promise<void>((resolve, reject) => {
-      parent.stdout.once("data", async (text) => {
-        const pid = Number(String(text));
-        while (isRunning({ pid, startTicks: 0 })) await new Promise((again) => setTimeout(again, 10));
-        // proc(5): state Z, a zombie.
-        const state = execFileSync("ps", ["-o", "stat=", "-p", String(pid)], { encoding: "utf8" });
-        await killed(parent);
-        if (state.startsWith("Z")) resolve();
-        else reject(new Error(`state ${state}`));
-      });
-    });
+    try {
+      const pid = Number(String(await new Promise((resolve) => parent.stdout.once("data", resolve))));
+      while (isRunning({ pid, startTicks: 0 })) await new Promise((again) => setTimeout(again, 10));
+      // proc(5): the third field is the state, Z a zombie.
+      expect(readFileSync(`/proc/${pid}/stat`, "utf8")).toMatch(/^\d+ \(.*\) Z /);
+    } finally {
+      await killed(parent);
+    }
   });
 });
 
