@@ -1,4 +1,7 @@
-import exactly from "string-width";
+import type exactly from "string-width";
+
+/** Set up by the bundler when it is first called for: the library's own setting up takes longer than a frame. */
+declare const require: (name: "string-width") => { readonly default: typeof exactly };
 
 /** Latin, punctuation, arrows, signs, lines and blocks: every one of them a cell wide, as in `cells.ts`. */
 const ONE_COLUMN =
@@ -12,5 +15,5 @@ const STYLES = /\u001b\[[\d;]*m/g;
  */
 export default function stringWidth(text: string): number {
   const plain = text.includes("\u001b") ? text.replace(STYLES, "") : text;
-  return ONE_COLUMN.test(plain) ? plain.length : exactly(plain);
+  return ONE_COLUMN.test(plain) ? plain.length : require("string-width").default(plain);
 }

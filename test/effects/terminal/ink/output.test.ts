@@ -1,11 +1,40 @@
+import { mkdtempSync, rmSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
+import { build } from "esbuild";
 import fc from "fast-check";
 import { default as libraryWidth } from "string-width";
-import { expect, it } from "vitest";
+import { afterAll, beforeAll, expect, it } from "vitest";
 import InkOutput from "../../../../node_modules/ink/build/output.js";
-import measureText from "../../../../src/effects/terminal/ink/measure-text.ts";
-import Output from "../../../../src/effects/terminal/ink/output.ts";
-import stringWidth from "../../../../src/effects/terminal/ink/string-width.ts";
 import { drawnCells } from "../../../helpers/emulator.ts";
+
+type Modules = typeof import("../../../../src/effects/terminal/ink/output.ts") & {
+  readonly measureText: (text: string) => { readonly width: number; readonly height: number };
+  readonly stringWidth: (text: string) => number;
+};
+
+// As the program has them: the bundler sets the library up when it is first called for.
+const folder = mkdtempSync(join(tmpdir(), "halfpower-ink-"));
+let Output: Modules["default"];
+let measureText: Modules["measureText"];
+let stringWidth: Modules["stringWidth"];
+beforeAll(async () => {
+  const ink = new URL("../../../../src/effects/terminal/ink/", import.meta.url).pathname;
+  const outfile = join(folder, "ink.mjs");
+  const contents = ["output", "measure-text", "string-width"].map((name) => `${ink}${name}.ts`);
+  await build({
+    stdin: {
+      contents: `export { default } from "${contents[0]}"; export { default as measureText } from "${contents[1]}"; export { default as stringWidth } from "${contents[2]}";`,
+      resolveDir: ink,
+    },
+    outfile,
+    bundle: true,
+    format: "esm",
+    platform: "node",
+  });
+  ({ default: Output, measureText, stringWidth } = (await import(outfile)) as Modules);
+});
+afterAll(() => rmSync(folder, { recursive: true, force: true }));
 
 const piece = fc
   .tuple(
