@@ -1,4 +1,7 @@
 import { ok } from "../../core/result.ts";
+import type { Charset } from "../../core/units/format.ts";
+import type { ResolvedChain } from "../../document/resolve.ts";
+import { verdictsOn } from "../../document/verdicts.ts";
 import { openChain } from "../chain-argument.ts";
 import { heading } from "../heading.ts";
 import type { Session } from "../io.ts";
@@ -7,6 +10,7 @@ import { chainLines } from "../sheet/chain-lines.ts";
 import { chartLines } from "../sheet/chart-lines.ts";
 import { readingLines } from "../sheet/reading-lines.ts";
 import { wrapped } from "../sheet/wrap.ts";
+import { verdictLines, verdictRows } from "../verdict-table.ts";
 
 /** What is shown when no chain is named. */
 export const DEMO_CHAIN = "strain-bridge";
@@ -30,8 +34,15 @@ export async function sheet(session: Session, chainArgument = DEMO_CHAIN): Promi
     ...chartLines(resolved, columns, charset),
     "",
     ...(await readingLines(resolved, charset)),
+    ...(await limitLines(resolved, charset)),
   ];
   return ok({ text: lines.map((line) => `${line.trimEnd()}\n`).join("") });
+}
+
+/** Limits and what folds, as in `check`; nothing for a chain without. */
+async function limitLines(resolved: ResolvedChain, charset: Charset): Promise<readonly string[]> {
+  const rows = verdictRows(resolved, verdictsOn(resolved));
+  return rows.length === 0 ? [] : ["", ...(await verdictLines(rows, charset))];
 }
 
 /** As the shell says, within reason. */
