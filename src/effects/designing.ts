@@ -1,6 +1,6 @@
 import { type FamilyAnswer, familyFigures } from "../core/design/figures.ts";
 import { leastDesign } from "../core/design/least-order.ts";
-import { realise } from "../core/design/realise/realise.ts";
+import { realiseSteps } from "../core/design/realise/realise.ts";
 import { FILTER_FAMILIES, type FilterFamily } from "../core/filters/spec.ts";
 import { ok } from "../core/result.ts";
 import { designedChain } from "../document/designed.ts";
@@ -27,9 +27,8 @@ export async function designAll(
     if (turn !== latest) return undefined;
     families.push(familyFigures(each, request.requirement));
   }
-  await nextTurn();
-  if (turn !== latest) return undefined;
-  const chosen = made(FILTER_FAMILIES[family] as FilterFamily, request);
+  const chosen = await made(FILTER_FAMILIES[family] as FilterFamily, request, () => turn === latest);
+  if (chosen === undefined) return undefined;
   if (!chosen.ok) return { id, families, chosen, look: undefined };
   const document = designedChain(chosen.value.spec, request.requirement, chosen.value.realisation);
   const resolved = resolveChain(document, context);
@@ -39,10 +38,21 @@ export async function designAll(
 
 const nextTurn = () => new Promise((resolve) => setImmediate(resolve));
 
-function made(family: FilterFamily, { requirement, circuit, bin }: DesignCommand["request"]): Chosen {
+/** Step by step; undefined when it is no longer wanted. */
+async function made(
+  family: FilterFamily,
+  { requirement, circuit, bin }: DesignCommand["request"],
+  isWanted: () => boolean,
+): Promise<Chosen | undefined> {
   const spec = leastDesign(family, requirement);
   if (!spec.ok) return spec;
   if (circuit === undefined) return ok({ spec: spec.value, realisation: undefined });
-  const realisation = realise(spec.value, requirement, circuit, bin);
-  return realisation.ok ? ok({ spec: spec.value, realisation: realisation.value }) : realisation;
+  const steps = realiseSteps(spec.value, requirement, circuit, bin);
+  for (;;) {
+    await nextTurn();
+    if (!isWanted()) return undefined;
+    const next = steps.next();
+    if (!next.done) continue;
+    return next.value.ok ? ok({ spec: spec.value, realisation: next.value.value }) : next.value;
+  }
 }

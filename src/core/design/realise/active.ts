@@ -1,6 +1,6 @@
 import type { FilterSpec } from "../../filters/transform.ts";
 import { logSpaced } from "../../response/grid.ts";
-import { fail, ok, type Result } from "../../result.ts";
+import { fail, ok } from "../../result.ts";
 import { formatQuantity } from "../../units/format.ts";
 import type { Requirement } from "../requirement.ts";
 import { aimedAt } from "./gbw.ts";
@@ -8,7 +8,7 @@ import { levelOf, levelStages } from "./level.ts";
 import { GainOf, idealGainDb } from "./response.ts";
 import type { PairTarget, SectionKind } from "./section-kinds.ts";
 import { sectionTargets } from "./targets.ts";
-import type { PartsBin, Realisation, RealisedStage, SectionTarget } from "./types.ts";
+import type { PartsBin, RealisedStage, SectionTarget, Steps } from "./types.ts";
 
 /** Frequencies at which a choice is weighed, from a decade below the pass edge to the stop edge. */
 const WEIGHED_AT = 40;
@@ -16,14 +16,14 @@ const WEIGHED_AT = 40;
 /**
  * The filter as active sections with series values, lowest Q first. Values of a section are chosen jointly, out of every
  * set of capacitors and the resistors beside the exact ones, so that with the sections before it the departure from
- * the ideal response is least up to the stop edge.
+ * the ideal response is least up to the stop edge. One section a step, so that a program can do something in between.
  */
-export function realiseActive(
+export function* activeSteps(
   spec: FilterSpec,
   requirement: Requirement,
   kind: SectionKind,
   bin: PartsBin,
-): Result<Realisation> {
+): Steps {
   const targets = sectionTargets(spec);
   if (!targets.ok) return targets;
   const freqsHz = logSpaced(requirement.passHz / 10, requirement.stopHz, WEIGHED_AT);
@@ -33,6 +33,7 @@ export function realiseActive(
   const stages: RealisedStage[] = [...level.stages];
   const warnings: string[] = [];
   for (const [k, target] of targets.value.entries()) {
+    yield;
     const chosen = choose(target, kind, bin, gain, freqsHz, error);
     if (chosen === undefined) return fail(outOfReach(target));
     stages.push(...chosen.stages.map((stage) => named(stage, k + 1)));

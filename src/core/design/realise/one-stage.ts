@@ -3,11 +3,11 @@ import { logSpaced } from "../../response/grid.ts";
 import { fail, ok, type Problem, type Result } from "../../result.ts";
 import { buildStage } from "../../stages/build.ts";
 import type { PartValues } from "../../stages/kind.ts";
-import { realiseActive } from "./active.ts";
+import { activeSteps } from "./active.ts";
 import { around, neighbours } from "./candidates.ts";
 import { GainOf } from "./response.ts";
 import { sallenKey } from "./section-kinds.ts";
-import type { PartsBin, Realisation, RealisedStage } from "./types.ts";
+import { allSteps, type PartsBin, type Realisation, type RealisedStage } from "./types.ts";
 
 /** Kinds of ideal stages that can be made of real parts. */
 export const REALISABLE = ["filter", "lowpass-1", "lowpass-2", "highpass-2", "bandpass-2"] as const;
@@ -36,7 +36,7 @@ function realiseFilter(values: PartValues, bin: PartsBin): Result<Realisation> {
   if (shape !== "lowpass")
     return fail({ found: `a ${shape} filter`, allowed: "a lowpass, or single sections" });
   const spec: FilterSpec = { shape, family, order, cornerHz: corner, rippleDb: ripple };
-  return realiseActive(spec, edgesAround(corner), sallenKey, bin);
+  return allSteps(activeSteps(spec, edgesAround(corner), sallenKey, bin));
 }
 
 /** From a decade below the corner to half a decade above it. */
@@ -52,7 +52,7 @@ function realiseLowpass(
   bin: PartsBin,
 ): Result<Realisation> {
   const spec: FilterSpec = { shape: "lowpass", family, order, cornerHz: f0 };
-  return realiseActive(spec, edgesAround(f0), sallenKey, bin);
+  return allSteps(activeSteps(spec, edgesAround(f0), sallenKey, bin));
 }
 
 const WEIGHED_AT = 40;

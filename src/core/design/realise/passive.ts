@@ -9,7 +9,7 @@ import { fail, ok, type Problem, type Result } from "../../result.ts";
 import { buildStage } from "../../stages/build.ts";
 import { nearestInSeries, type SeriesName, stepInSeries } from "../../units/e-series.ts";
 import type { Requirement } from "../requirement.ts";
-import type { PartsBin, Realisation, RealisedStage } from "./types.ts";
+import type { PartsBin, RealisedStage, Steps } from "./types.ts";
 
 const WEIGHED_AT = 60;
 const MOST_ROUNDS = 12;
@@ -20,13 +20,9 @@ const isCapacitor = (k: number): boolean => k % 2 === 0;
 /**
  * The filter as an LC ladder between the given source resistance and its load, of series values: each starts at the
  * member next to the published element value, then one after the other is moved to a neighbour as long as the departure
- * from the ideal response, level apart, gets less.
+ * from the ideal response, level apart, gets less. One round a step.
  */
-export function realiseLadder(
-  spec: FilterSpec,
-  requirement: Requirement,
-  bin: PartsBin,
-): Result<Realisation> {
+export function* ladderSteps(spec: FilterSpec, requirement: Requirement, bin: PartsBin): Steps {
   const published = ladderValues(spec);
   if (!published.ok) return fail<Problem>(published.problem);
   const ideal = idealGain(spec, requirement);
@@ -42,7 +38,7 @@ export function realiseLadder(
   );
   const series: SeriesName = bin.resistors;
   const weigh = weigher(ideal.value, sourceOhm, loadOhm);
-  const values = refined(
+  const values = yield* refined(
     exactValues.map((value) => nearestInSeries(value, series) ?? value),
     series,
     weigh,
@@ -101,9 +97,14 @@ function weigher({ freqsHz, gainDb }: IdealGain, sourceOhm: number, loadOhm: num
   };
 }
 
-function refined(start: readonly number[], series: SeriesName, weigh: Weigh): readonly number[] {
+function* refined(
+  start: readonly number[],
+  series: SeriesName,
+  weigh: Weigh,
+): Generator<void, readonly number[]> {
   let [best, least] = [start, weigh(start).worst];
   for (let round = 0; round < MOST_ROUNDS; round++) {
+    yield;
     const before = least;
     for (let k = 0; k < best.length; k++) {
       for (const direction of ["up", "down"] as const) {

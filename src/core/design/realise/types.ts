@@ -1,3 +1,4 @@
+import type { Result } from "../../result.ts";
 import type { SeriesName } from "../../units/e-series.ts";
 
 /** What real parts are chosen from, and around which impedance. */
@@ -33,4 +34,15 @@ export interface Realisation {
   readonly passErrorDb: number;
   readonly stopErrorDb: number;
   readonly warnings: readonly string[];
+}
+
+/** A realisation in steps that take some ten milliseconds each at most. */
+export type Steps = Generator<void, Result<Realisation>>;
+
+/** All steps at once. */
+export function allSteps(steps: Steps): Result<Realisation> {
+  for (;;) {
+    const next = steps.next();
+    if (next.done) return next.value;
+  }
 }
