@@ -81,7 +81,7 @@ export const BINDINGS: readonly Binding[] = [
   ),
   binding("Jump", "n", "n", "to the next place of note", (state) => toNextPlace(state, 1)),
   binding("Jump", "N", "N", "to the place of note before", (state) => toNextPlace(state, -1)),
-  binding("Jump", "g", "g", "choose a place: half power, peaks, nulls, ±180°", listPlaces),
+  binding("Jump", "g", "g", "a list of them: peaks, nulls, ±180° …", listPlaces),
 
   binding("Look", "z", "z", "zoom in on the cursor", (state) => zoom(state, "in")),
   binding("Look", "Z", "Z", "zoom out", (state) => zoom(state, "out")),
@@ -93,7 +93,7 @@ export const BINDINGS: readonly Binding[] = [
   ),
   binding("Look", "y", "y", "what is laid over the charts", chooseOverlays),
 
-  binding("Compare", "b", "b", "keep the present response behind the charts", keepGhost),
+  binding("Compare", "b", "b", "keep the response behind the charts", keepGhost),
   binding("Compare", "space", "Space", "before and after change places", flipGhost),
   binding("Compare", "B", "B", "drop the response kept", dropGhost),
 
@@ -102,12 +102,12 @@ export const BINDINGS: readonly Binding[] = [
   binding("Walk the chain", "tab", "Tab", "the next value of the row", (state) => toField(state, 1)),
   binding("Walk the chain", "backtab", "Shift+Tab", "the value before", (state) => toField(state, -1)),
 
-  binding("Change a value", "enter", "Enter", "edit the value in hand, or type a number over it", (state) =>
+  binding("Change a value", "enter", "Enter", "edit it, or type a number over it", (state) =>
     editField(state),
   ),
   binding("Change a value", "+ =", "+", "one step up", (state) => nudge(state, "up")),
   binding("Change a value", "- _", "-", "one step down", (state) => nudge(state, "down")),
-  binding("Change a value", "e", "e", "choose the step: an E series, or percent", chooseNudge),
+  binding("Change a value", "e", "e", "choose the step: E series or percent", chooseNudge),
   binding("Change a value", "t", "t", "tolerance of the value in hand", editTolerance),
   binding("Change a value", "u", "u", "undo", undo),
   binding("Change a value", "U ctrl+r", "U Ctrl+R", "do again", redo),
@@ -125,9 +125,9 @@ export const BINDINGS: readonly Binding[] = [
   binding("Change the chain", "r", "r", "rename", askToRename),
 
   binding("Real parts", "D", "D", "design a filter from its edges", openDesign),
-  binding("Real parts", "R", "R", "make the ideal stage in hand of real parts", realiseInHand),
+  binding("Real parts", "R", "R", "make an ideal stage of real parts", realiseInHand),
   binding("Real parts", "E", "E", "snap the stage's parts to the series", snapInHand),
-  binding("Real parts", "i", "i", "solve the value in hand for a gain at the cursor", (state) =>
+  binding("Real parts", "i", "i", "solve it for a gain at the cursor", (state) =>
     ask(state, { type: "solve" }, "gain at the cursor, in dB"),
   ),
 

@@ -26,7 +26,8 @@ export const GAP_COLUMNS = 1;
 /** The panes of a screen; undefined below the least size. */
 export function layoutOf({ columns, rows }: Size): Layout | undefined {
   if (columns < LEAST_SIZE.columns || rows < LEAST_SIZE.rows) return undefined;
-  const readingRows = rows >= 22 ? 4 : 3;
+  // Frequency to slope take three rows of a narrow screen, two of a wide one; pin and kept response one each.
+  const readingRows = columns < 76 && rows >= 22 ? 5 : 4;
   const bodyRows = rows - STATE_ROWS - HINT_ROWS - readingRows;
   const listColumns = listWidth(columns);
   const chartColumns = columns - listColumns - GAP_COLUMNS;

@@ -28,6 +28,9 @@ export interface CursorReading {
   readonly continuousDeg: number;
 }
 
+/** Frequency to slope take so many rows on the narrowest screen. */
+const LEAST_ROWS = 3;
+
 /** From here on there is room for the continuous phase too. */
 const WIDE = 92;
 
@@ -39,11 +42,12 @@ export function readingPane(
   charset: Charset,
 ): readonly Line[] {
   const phase = phaseText(reading, size.columns < WIDE ? Number.NaN : continuousDeg, charset);
-  const lines = [
-    ...packed(entriesOf(state, reading, continuousDeg, phase, charset), size.columns),
-    pinLine(state, reading, charset),
-    ghostLine(state, reading, charset),
-  ].filter((line) => line.length > 0);
+  const compared = [pinLine(state, reading, charset), ghostLine(state, reading, charset)].filter(
+    (line) => line.length > 0,
+  );
+  // Where there is no room for all, margin and folding give way to what was asked for with a key.
+  const own = packed(entriesOf(state, reading, continuousDeg, phase, charset), size.columns);
+  const lines = [...own.slice(0, Math.max(LEAST_ROWS, size.rows - compared.length)), ...compared];
   while (lines.length < size.rows) lines.push([]);
   return lines.slice(0, size.rows).map((line) => fittedLine(line, size.columns, charset));
 }
