@@ -200,18 +200,20 @@ function listHints(purpose: string): readonly (readonly [string, string])[] {
 
 function rowHints(state: EditorState): readonly (readonly [string, string])[] {
   const row = rowInHand(state);
+  // All keys and the way out come before what may be cut off on a narrow screen.
   const always = [
+    ["?", "all keys"],
     ["← →", "cursor"],
     ["↑ ↓", "rows"],
     ["Tab", "values"],
     ["Enter", "edit"],
+    ["q", "leave"],
   ] as const;
   const rest = [
     ["a", "add"],
     ["u", "undo"],
     ["s", "save"],
-    ["?", "all keys"],
-    ["q", "leave"],
+    ["D", "design"],
   ] as const;
   if (row.type !== "stage") return [...always, ...rest];
   return [
