@@ -24,9 +24,10 @@ function aberth(p: Polynomial): readonly Complex[] {
   for (let pass = 0; pass < MOST_PASSES && settled.includes(false); pass++) {
     for (let k = 0; k < roots.length; k++) {
       if (settled[k]) continue;
-      const step = correction(p, roots, k);
+      const newton = newtonStep(p, roots[k]);
+      const step = repelled(newton.step, roots, k);
       roots[k] = subtract(roots[k], step);
-      settled[k] = modulus(step) <= 2 * Number.EPSILON * modulus(roots[k]);
+      settled[k] = newton.isRounding || modulus(step) <= 2 * Number.EPSILON * modulus(roots[k]);
     }
   }
   return roots.map(onAxis);
@@ -37,8 +38,8 @@ function onAxis(root: Complex): Complex {
   return Math.abs(root.im) <= 1e-13 * Math.abs(root.re) ? complex(root.re) : root;
 }
 
-function correction(p: Polynomial, roots: readonly Complex[], k: number): Complex {
-  const newton = newtonStep(p, roots[k]);
+/** Newton's step, kept from running into the other roots. */
+function repelled(newton: Complex, roots: readonly Complex[], k: number): Complex {
   if (newton.re === 0 && newton.im === 0) return newton;
   let repulsion = complex(0);
   for (let j = 0; j < roots.length; j++) {
@@ -48,28 +49,43 @@ function correction(p: Polynomial, roots: readonly Complex[], k: number): Comple
   return divide(newton, subtract(complex(1), multiply(newton, repulsion)));
 }
 
+interface NewtonStep {
+  readonly step: Complex;
+  /** The polynomial's value there is its own rounding: further steps only wander about the root. */
+  readonly isRounding: boolean;
+}
+
 /** `p/p'` at z; outside the unit circle by the reversed polynomial, so that no power overflows. */
-function newtonStep(p: Polynomial, z: Complex): Complex {
+function newtonStep(p: Polynomial, z: Complex): NewtonStep {
   const degree = p.length - 1;
   if (modulus(z) <= 1) {
-    const { value, slope } = horner(p, z);
-    return value.re === 0 && value.im === 0 ? value : divide(value, slope);
+    const { value, slope, isRounding } = horner(p, z);
+    return { step: isZero(value) ? value : divide(value, slope), isRounding };
   }
   // p(z) = zⁿ·r(1/z), so p/p' = z·r / (n·r − r'/z).
   const w = divide(complex(1), z);
-  const { value, slope } = horner([...p].reverse(), w);
-  if (value.re === 0 && value.im === 0) return value;
-  return divide(multiply(z, value), subtract(scale(value, degree), multiply(w, slope)));
+  const { value, slope, isRounding } = horner([...p].reverse(), w);
+  if (isZero(value)) return { step: value, isRounding };
+  const step = divide(multiply(z, value), subtract(scale(value, degree), multiply(w, slope)));
+  return { step, isRounding };
 }
 
-function horner(p: Polynomial, z: Complex): { value: Complex; slope: Complex } {
-  let value = complex(p[p.length - 1]);
+const isZero = ({ re, im }: Complex): boolean => re === 0 && im === 0;
+
+/** Rounding of Horner's rule is below `(4n + 1)·u·Σ|p_k|·|z|^k`, u half of epsilon; same source. */
+function horner(p: Polynomial, z: Complex): { value: Complex; slope: Complex; isRounding: boolean } {
+  const degree = p.length - 1;
+  const size = modulus(z);
+  let value = complex(p[degree]);
   let slope = complex(0);
-  for (let k = p.length - 2; k >= 0; k--) {
+  let sum = Math.abs(p[degree]);
+  for (let k = degree - 1; k >= 0; k--) {
     slope = add(multiply(slope, z), value);
     value = add(multiply(value, z), complex(p[k]));
+    sum = sum * size + Math.abs(p[k]);
   }
-  return { value, slope };
+  const isRounding = modulus(value) <= (4 * degree + 1) * (Number.EPSILON / 2) * sum;
+  return { value, slope, isRounding };
 }
 
 /** As many points on each circle as the upper hull of `log |p_k|` has steps on that edge. */
