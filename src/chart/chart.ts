@@ -74,7 +74,7 @@ function mark(
   canvas.put(nearestRow(rowScale, value), column, glyph, role);
 }
 
-/** Labels set to the right, the unit once above or beside them, and the axis. */
+/** Labels set to the right, the unit once above them or below the topmost, and the axis. */
 function marginOf(axis: ValueAxis, rows: number, quantity: "gain" | "phase", charset: Charset): Span[][] {
   const glyphs = glyphsOf(charset);
   const labels = new Map(
@@ -82,18 +82,22 @@ function marginOf(axis: ValueAxis, rows: number, quantity: "gain" | "phase", cha
   );
   const unit = quantity === "gain" ? "dB" : "deg";
   const unitRow = labels.has(0) ? 1 : 0;
+  labels.delete(unitRow);
   return Array.from({ length: rows }, (_, row) => {
     const label = labels.get(row);
-    const text = label ?? (row === unitRow ? unit : "");
+    const text = row === unitRow ? unit : (label ?? "");
     return [
-      { text: text.slice(0, LABEL_COLUMNS).padStart(LABEL_COLUMNS), role: "label" },
+      { text: text.padStart(LABEL_COLUMNS), role: "label" },
       { text: label === undefined ? glyphs.axis : glyphs.axisTick, role: "axis" },
     ];
   });
 }
 
-/** At most six figures: steps are round. */
-const tickText = (value: number): string => String(Number(value.toPrecision(6)));
+/** At most six figures: steps are round. A label that is wider than its place would be another value, cut. */
+function tickText(value: number): string {
+  const text = String(Number(value.toPrecision(6)));
+  return text.length <= LABEL_COLUMNS ? text : "";
+}
 
 function cutTo(spans: readonly Span[], columns: number): Span[] {
   const shown: Span[] = [];
@@ -133,13 +137,13 @@ export function drawFrequencyAxis(options: AxisOptions): readonly (readonly Span
   return canvas.spans();
 }
 
-/** Centred below their marks, each left out where it would touch the one before. */
+/** Centred below their marks, those at the ends moved inwards; each left out where it would touch the one before. */
 function writeLabels(canvas: Canvas, scale: FrequencyScale): void {
-  let free = MARGIN_COLUMNS - 1;
+  let free = MARGIN_COLUMNS;
   for (const { column, label } of frequencyTicks(scale)) {
     if (label === "") continue;
     const centred = MARGIN_COLUMNS + column - Math.floor(label.length / 2);
-    const start = Math.min(centred, canvas.columns - label.length);
+    const start = Math.min(Math.max(centred, MARGIN_COLUMNS), canvas.columns - label.length);
     if (start < free) continue;
     canvas.write(1, start, label, "label");
     free = start + label.length + 1;

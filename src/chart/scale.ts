@@ -1,3 +1,5 @@
+import { decadesBetween, middleHz } from "../core/response/grid.ts";
+
 /** A logarithmic frequency axis over whole columns: the first column is `fromHz`, the last is `toHz`. */
 export interface FrequencyScale {
   readonly fromHz: number;
@@ -17,16 +19,20 @@ export const plotColumns = (columns: number): number => Math.max(0, columns - MA
 
 /** Frequency in Hz at the middle of a column (whole or not): `fromHz·(toHz/fromHz)^(column/(columns−1))`. */
 export function frequencyOfColumn({ fromHz, toHz, columns }: FrequencyScale, column: number): number {
-  if (columns < 2) return Math.sqrt(fromHz * toHz);
-  return column === columns - 1 ? toHz : fromHz * (toHz / fromHz) ** (column / (columns - 1));
+  if (columns < 2) return middleHz(fromHz, toHz);
+  if (column === columns - 1) return toHz;
+  const part = column / (columns - 1);
+  const ratio = toHz / fromHz;
+  // Their ratio may be beyond a double.
+  return ratio < Infinity ? fromHz * ratio ** part : fromHz ** (1 - part) * toHz ** part;
 }
 
 /** The column nearest to a frequency in Hz; undefined outside the axis. */
 export function columnOfFrequency(scale: FrequencyScale, freqHz: number): number | undefined {
   const { fromHz, toHz, columns } = scale;
   if (columns < 1 || !(freqHz >= fromHz && freqHz <= toHz)) return undefined;
-  if (columns === 1) return 0;
-  return Math.round((columns - 1) * (Math.log(freqHz / fromHz) / Math.log(toHz / fromHz)));
+  if (columns === 1 || fromHz === toHz) return 0;
+  return Math.round((columns - 1) * (decadesBetween(fromHz, freqHz) / decadesBetween(fromHz, toHz)));
 }
 
 /** First and last column that a span of frequencies touches; undefined where it lies outside the axis. */
@@ -41,5 +47,5 @@ export function columnsBetween(
 }
 
 export function columnsPerDecade({ fromHz, toHz, columns }: FrequencyScale): number {
-  return (columns - 1) / Math.log10(toHz / fromHz);
+  return (columns - 1) / decadesBetween(fromHz, toHz);
 }

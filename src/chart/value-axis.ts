@@ -48,6 +48,7 @@ export function phaseAxis(rows: number, traces: readonly ArrayLike<number>[]): V
 /** An axis with the given bounds; labels at the closest round steps that leave room. */
 export function fixedAxis(quantity: "gain" | "phase", rows: number, { low, high }: ValueRange): ValueAxis {
   const steps = quantity === "gain" ? GAIN_STEPS : PHASE_STEPS;
+  if (rows < 2) return { low, high, ticks: [] };
   const most = Math.max(1, Math.floor((rows - 1) / LEAST_ROWS_PER_STEP));
   const step = steps.find((candidate) => (high - low) / candidate <= most) ?? high - low;
   return { low, high, ticks: ticksFrom(low, high, step) };
@@ -60,10 +61,13 @@ export function fixedAxis(quantity: "gain" | "phase", rows: number, { low, high 
 function fitted({ low, high }: ValueRange, rows: number, steps: readonly number[]): ValueAxis {
   const intervals = rows - 1;
   if (intervals < 1) return { low, high, ticks: [] };
-  const leastRows = Math.min(LEAST_ROWS_PER_STEP, Math.ceil(intervals / 2));
   let best: (ValueRange & { step: number }) | undefined;
   for (const step of steps) {
-    for (let rowsPerStep = leastRows; rowsPerStep <= intervals; rowsPerStep++) {
+    for (
+      let rowsPerStep = LEAST_ROWS_PER_STEP;
+      rowsPerStep <= Math.max(LEAST_ROWS_PER_STEP, intervals);
+      rowsPerStep++
+    ) {
       const slack = (SLACK_ROWS * step) / rowsPerStep;
       const top = exact(Math.ceil((high - slack) / step) * step);
       const span = (step * intervals) / rowsPerStep;
